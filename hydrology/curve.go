@@ -43,6 +43,7 @@ type Curve struct {
 
 // segment is the curve from one tabulated duration to the next: i = intensity·(t/duration)^exponent.
 type segment struct {
+	duration  float64
 	intensity float64 // at the duration that it starts from
 	exponent  float64 // 0 or negative; 0 in the last, which is a point
 	next      float64 // intensity at the next duration, under which rounding may not fall
@@ -53,7 +54,7 @@ type segment struct {
 func newCurve(durations, intensities []float64) Curve {
 	segments := make([]segment, len(durations))
 	for k := range segments {
-		segments[k] = segment{intensity: intensities[k], next: intensities[k]}
+		segments[k] = segment{duration: durations[k], intensity: intensities[k], next: intensities[k]}
 		if k+1 < len(durations) {
 			segments[k].next = intensities[k+1]
 			segments[k].exponent = math.Log(intensities[k+1]/intensities[k]) / math.Log(durations[k+1]/durations[k])
@@ -81,11 +82,15 @@ func (c Curve) At(minutes float64) (intensity float64, where Range) {
 		}
 		left -= half
 	}
-	s := c.segments[k]
-	if minutes == c.durations[k] || s.exponent == 0 {
+	s := &c.segments[k]
+	if minutes == s.duration || s.exponent == 0 {
 		return s.intensity, Within
 	}
-	return max(s.next, s.intensity*math.Exp(s.exponent*math.Log(minutes/c.durations[k]))), Within
+	intensity = s.intensity * math.Exp(s.exponent*math.Log(minutes/s.duration))
+	if intensity < s.next {
+		intensity = s.next
+	}
+	return intensity, Within
 }
 
 // Durations gives the tabulated durations in minutes, rising: the corners of the curve. It is a copy.
