@@ -33,19 +33,25 @@ func (c Circle) Span() float64 { return c.diameter }
 // Closed is true.
 func (c Circle) Closed() bool { return true }
 
-// At measures the circle at a depth y by the half central angle φ = θ/2 of the water surface:
+// At measures the circle at a depth.
+func (c Circle) At(depth float64) Geometry {
+	y := clampDepth(depth, c.diameter)
+	if y == c.diameter {
+		return Geometry{Area: math.Pi / 4 * y * y, Perimeter: math.Pi * y}
+	}
+	return segment(c.diameter, y, c.diameter-y)
+}
+
+// segment measures the part of a circle of diameter D below a horizontal line, given the heights of the circle below and
+// above that line. With the half central angle φ = θ/2 of the line, 2 atan √(below/above),
 //
 //	A = D²/4 (φ - sin φ cos φ)    P = D φ    T = D sin φ    (Chow 1959, table 2-1, with θ = 2φ)
-func (c Circle) At(depth float64) Geometry {
-	D, y := c.diameter, clampDepth(depth, c.diameter)
-	if y == D {
-		return Geometry{Area: math.Pi / 4 * D * D, Perimeter: math.Pi * D}
-	}
-	below, above := math.Sqrt(y), math.Sqrt(D-y)
-	halfAngle := 2 * math.Atan2(below, above)
-	top := 2 * below * above // D sin φ, exact at both ends where sin of an angle near π is not
+func segment(D, below, above float64) Geometry {
+	root, rootAbove := math.Sqrt(below), math.Sqrt(max(above, 0))
+	halfAngle := 2 * math.Atan2(root, rootAbove)
+	top := 2 * root * rootAbove // D sin φ, exact at both ends where the sine of an angle near π is not
 	return Geometry{
-		Area:      D * D * circleArea(y/D, halfAngle, top/D),
+		Area:      D * D * circleArea(below/D, halfAngle, top/D),
 		Perimeter: D * halfAngle,
 		TopWidth:  top,
 	}

@@ -31,8 +31,8 @@ func depthOfFactor(s Section, factor float64) (depth float64, ok bool) {
 // depthAbove is a depth on the rising branch of the discharge at which A R^(2/3) is not under the given value.
 func depthAbove(s Section, factor float64) (depth float64, ok bool) {
 	if s.Closed() {
-		depth, largest := largestFactor(s)
-		return depth, factor <= largest
+		top := crestOf(s)
+		return top.depth, factor <= top.factor
 	}
 	rise := s.Rise()
 	if !math.IsInf(rise, 1) {
@@ -46,34 +46,4 @@ func depthAbove(s Section, factor float64) (depth float64, ok bool) {
 		}
 	}
 	return depth, true
-}
-
-// underRoof is the greatest depth ratio that still counts as below a roof: one part in 2^50, near the spacing of
-// floating-point numbers, so that a section is measured there as it is just before it fills.
-const underRoof = 1 - 1./(1<<50)
-
-// largestFactor is the largest A R^(2/3) of a closed section and its depth, found by golden-section search over the
-// upper half. The depth is good to about 1e-8 of the rise, as the top of a curve is flat; the value to its last digits.
-func largestFactor(s Section) (depth, factor float64) {
-	const golden = 0.6180339887498949 // (√5 - 1)/2
-	low, high := s.Rise()/2, s.Rise()*underRoof
-	left, right := high-golden*(high-low), low+golden*(high-low)
-	atLeft, atRight := sectionFactor(s.At(left)), sectionFactor(s.At(right))
-	for high-low > 1e-9*high {
-		if atLeft > atRight {
-			high, right, atRight = right, left, atLeft
-			left = high - golden*(high-low)
-			atLeft = sectionFactor(s.At(left))
-		} else {
-			low, left, atLeft = left, right, atRight
-			right = low + golden*(high-low)
-			atRight = sectionFactor(s.At(right))
-		}
-	}
-	for _, y := range [...]float64{left, right, s.Rise() * underRoof} {
-		if value := sectionFactor(s.At(y)); value > factor {
-			depth, factor = y, value
-		}
-	}
-	return depth, factor
 }

@@ -1,0 +1,64 @@
+package pipeflow_test
+
+import (
+	"math"
+	"testing"
+
+	"rimfall/pipeflow"
+	"rimfall/pipeflow/sectiontest"
+)
+
+// TestEverySection holds each shape against the common suite. Dimensions are round numbers near pipes that are made.
+func TestEverySection(t *testing.T) {
+	shapes := map[string]sectiontest.Shape{
+		"a circle": {
+			New:      func(k float64) (pipeflow.Section, error) { return pipeflow.NewCircle(1.5 * k) },
+			FullArea: math.Pi * 1.5 * 1.5 / 4, FullPerimeter: math.Pi * 1.5, Upright: true,
+		},
+		"a box": {
+			New:      func(k float64) (pipeflow.Section, error) { return pipeflow.NewBox(8*k, 6*k) },
+			FullArea: 48, FullPerimeter: 28, Upright: true,
+		},
+		"a haunched box": {
+			New:      func(k float64) (pipeflow.Section, error) { return pipeflow.NewHaunchedBox(8*k, 6*k, 0.5*k) },
+			FullArea: 48 - 4*0.125, FullPerimeter: 28 - 8*0.5 + 4*0.5*math.Sqrt2, Upright: true,
+		},
+		"a haunched box without haunches": {
+			New:      func(k float64) (pipeflow.Section, error) { return pipeflow.NewHaunchedBox(8*k, 6*k, 0) },
+			FullArea: 48, FullPerimeter: 28, Upright: true,
+		},
+		"a lying ellipse": {
+			New:      func(k float64) (pipeflow.Section, error) { return pipeflow.NewEllipse(60*k, 38*k) },
+			FullArea: math.Pi / 4 * 60 * 38, Upright: true,
+		},
+		"an upright ellipse": {
+			New:      func(k float64) (pipeflow.Section, error) { return pipeflow.NewEllipse(38*k, 60*k) },
+			FullArea: math.Pi / 4 * 60 * 38, Upright: true,
+		},
+		"an arch whose corner arcs are the widest": {
+			New:     func(k float64) (pipeflow.Section, error) { return pipeflow.NewArch(36*k, 22*k, 51*k, 0, 6*k) },
+			Upright: true,
+		},
+		"an arch with a round crown": {
+			New:     func(k float64) (pipeflow.Section, error) { return pipeflow.NewArch(36*k, 28*k, 51*k, 0, 6*k) },
+			Upright: true,
+		},
+		"a lying oval of arcs": {
+			New: func(k float64) (pipeflow.Section, error) {
+				s, _, err := pipeflow.NewOval(60*k, 38*k, 0, 14*k)
+				return s, err
+			},
+			Upright: true,
+		},
+		"an upright oval of arcs": {
+			New: func(k float64) (pipeflow.Section, error) {
+				s, _, err := pipeflow.NewOval(38*k, 60*k, 14*k, 0)
+				return s, err
+			},
+			Upright: true,
+		},
+	}
+	for name, shape := range shapes {
+		t.Run(name, func(t *testing.T) { sectiontest.Run(t, shape) })
+	}
+}
