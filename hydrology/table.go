@@ -1,6 +1,7 @@
 package hydrology
 
 import (
+	"cmp"
 	"math"
 	"slices"
 )
@@ -34,15 +35,7 @@ func columnsByPeriod(periods []float64) []int {
 	for k := range order {
 		order[k] = k
 	}
-	slices.SortStableFunc(order, func(a, b int) int {
-		switch {
-		case periods[a] < periods[b]:
-			return -1
-		case periods[a] > periods[b]:
-			return 1
-		}
-		return 0
-	})
+	slices.SortStableFunc(order, func(a, b int) int { return cmp.Compare(periods[a], periods[b]) })
 	return order
 }
 
