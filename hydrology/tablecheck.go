@@ -3,6 +3,7 @@ package hydrology
 import (
 	"fmt"
 	"math"
+	"slices"
 	"strings"
 )
 
@@ -50,6 +51,7 @@ func (f CellFault) place() string {
 // columns may stand in any order. Nil where all is well.
 func CheckTable(durations, periods []float64, values [][]float64) CellFaults {
 	c := tableCheck{durations: durations, periods: periods, values: values, order: columnsByPeriod(periods)}
+	c.order = slices.DeleteFunc(c.order, func(column int) bool { return !positive(periods[column]) })
 	c.shape()
 	c.headings()
 	for row := range values {
@@ -62,7 +64,7 @@ func CheckTable(durations, periods []float64, values [][]float64) CellFaults {
 type tableCheck struct {
 	durations, periods []float64
 	values             [][]float64
-	order              []int // columns by rising period
+	order              []int // columns by rising period; those without a lawful period left out
 	faults             CellFaults
 }
 
@@ -146,7 +148,7 @@ func (c *tableCheck) value(row, column int) (value float64, ok bool) {
 func (c *tableCheck) risesWithDuration(row, column int) {
 	value := c.values[row][column]
 	if above, ok := c.value(row-1, column); ok && value > above {
-		c.add(row, column, "intensity rises with duration, from %v to %v; it stays or falls", above, value)
+		c.add(row, column, "intensity rises with duration, from %.6g to %.6g; it stays or falls", above, value)
 	}
 }
 
@@ -160,7 +162,7 @@ func (c *tableCheck) fallsWithPeriod(row, column int) {
 		}
 		shorter := c.order[k-1]
 		if less, ok := c.value(row, shorter); ok && c.values[row][column] < less {
-			c.add(row, column, "intensity falls with return period, from %v at %v years to %v at %v years; it stays or rises",
+			c.add(row, column, "intensity falls with return period, from %.6g at %v years to %.6g at %v years; it stays or rises",
 				less, c.periods[shorter], c.values[row][column], c.periods[column])
 		}
 	}

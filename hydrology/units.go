@@ -14,6 +14,9 @@ const (
 	LitresPerSecondHa  IntensityUnit = "L/s/ha"
 )
 
+// MinutesPerDay is 24 hours.
+const MinutesPerDay = 1440
+
 // MillimetresPerInch is exact (international inch, 1959).
 const MillimetresPerInch = 25.4
 
