@@ -100,12 +100,3 @@ var momentSeries = [...]float64{
 	8. / 15, -4. / 35, -1. / 63, -1. / 198, -5. / 2288,
 	-7. / 6240, -7. / 10880, -33. / 82688, -143. / 544768, -715. / 3956736, -2431. / 18841600,
 }
-
-// evaluate sums a power series in x by Horner's rule.
-func evaluate(coefficients []float64, x float64) float64 {
-	sum := 0.0
-	for i := len(coefficients) - 1; i >= 0; i-- {
-		sum = sum*x + coefficients[i]
-	}
-	return sum
-}

@@ -14,16 +14,32 @@ func CriticalDepth(s Section, g, flow float64) (depth float64, ok bool) {
 		return 0, true
 	}
 	target := flow / g * flow // A³/T to be reached
-	if !(flow > 0) || !(g > 0) || math.IsInf(target, 1) {
+	if !(flow > 0) || !(g > 0) || !(target > 0) || math.IsInf(target, 1) {
 		return 0, false
 	}
-	high, ok := criticalAbove(s, target)
-	if !ok {
-		return 0, false
+	if fast, is := s.(criticalSolver); is {
+		if depth, ok := fast.criticalDepth(target); ok {
+			return depth, true
+		}
 	}
-	return solveDepth(high, func(y float64) float64 {
-		return math.Log(criticalFactor(s.At(y)) / target)
-	})
+	high, limit := s.Rise()*underRoof, math.Inf(1)
+	if s.Closed() {
+		limit = s.Rise()
+	}
+	if !math.IsInf(high, 1) && criticalFactor(s.At(high)) < target {
+		return high, s.Closed() && !flatRoofed(s)
+	}
+	start := criticalStart(s, target)
+	if !(start < high) {
+		start = high * 0.999
+	}
+	return solveDepth(start, high, limit, criticalFunction(s, target))
+}
+
+// criticalSolver is a section with a faster way to its critical depth for A³/T of a given value. It may decline with ok
+// false, whereupon the search decides.
+type criticalSolver interface {
+	criticalDepth(target float64) (depth float64, ok bool)
 }
 
 // criticalFactor is A³/T, which equals Q²/g at the critical depth.
@@ -31,20 +47,29 @@ func criticalFactor(g Geometry) float64 {
 	return g.Area * g.Area * (g.Area / g.TopWidth)
 }
 
-// criticalAbove is a depth at which A³/T is not under the target.
-func criticalAbove(s Section, target float64) (depth float64, ok bool) {
-	if rise := s.Rise(); !math.IsInf(rise, 1) {
-		depth = rise * underRoof
-		return depth, criticalFactor(s.At(depth)) >= target
+// criticalStart is a first guess. Over a flat floor of width b, y = (Q²/(g b²))^(1/3) where that is shallow; a closed
+// section fills like a circle of the same A³/T, with the full area and the span in it.
+func criticalStart(s Section, target float64) float64 {
+	wide := math.Inf(1)
+	if floor := s.At(0).TopWidth; floor > 0 {
+		wide = math.Cbrt(target / floor / floor)
 	}
-	depth = 1
-	for criticalFactor(s.At(depth)) < target {
-		depth *= 4
-		if math.IsInf(depth, 1) {
-			return 0, false
-		}
+	if s.Closed() && wide > s.Rise()/2 {
+		full := s.At(s.Rise()).Area
+		circle := math.Pi * math.Pi * math.Pi / 64 // A³/T with the full area and the diameter, over D⁵
+		return s.Rise() * criticalGuess(64*circle*target/full*s.Span()/full/full)
 	}
-	return depth, true
+	if math.IsInf(wide, 1) {
+		return min(1, s.Rise()/2)
+	}
+	return wide
+}
+
+// flatRoofed reports whether the roof of a closed section has a width: whether just below it the section is still wide.
+// Under a round crown the width there, a part in 2^25 of the crown's radius, is far below the limit.
+func flatRoofed(s Section) bool {
+	const limit = 1e-5
+	return s.Closed() && s.At(s.Rise()*underRoof).TopWidth > limit*s.Span()
 }
 
 // Froude is the ratio of the mean velocity to that of a small wave on the surface, Q / (A √(g A/T)): under 1 for

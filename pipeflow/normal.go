@@ -17,33 +17,49 @@ func (m Manning) NormalDepth(s Section, flow float64) (depth float64, ok bool) {
 	return depthOfFactor(s, flow/m.strength())
 }
 
-// depthOfFactor is the least depth at which A R^(2/3) has the given value over 0.
-func depthOfFactor(s Section, factor float64) (depth float64, ok bool) {
-	high, ok := depthAbove(s, factor)
-	if !ok {
-		return 0, false
-	}
-	return solveDepth(high, func(y float64) float64 {
-		return math.Log(sectionFactor(s.At(y)) / factor)
-	})
+// normalSolver is a section with a faster way to its lower normal depth for A R^(2/3) of a given value. It may decline
+// with ok false, whereupon the search decides.
+type normalSolver interface {
+	normalDepth(factor float64) (depth float64, ok bool)
 }
 
-// depthAbove is a depth on the rising branch of the discharge at which A R^(2/3) is not under the given value.
-func depthAbove(s Section, factor float64) (depth float64, ok bool) {
-	if s.Closed() {
-		top := crestOf(s)
-		return top.depth, factor <= top.factor
-	}
-	rise := s.Rise()
-	if !math.IsInf(rise, 1) {
-		return rise, sectionFactor(s.At(rise)) >= factor
-	}
-	depth = 1
-	for sectionFactor(s.At(depth)) < factor {
-		depth *= 4
-		if math.IsInf(depth, 1) {
-			return 0, false
+// depthOfFactor is the least depth at which A R^(2/3) has the given value over 0.
+func depthOfFactor(s Section, factor float64) (depth float64, ok bool) {
+	if fast, is := s.(normalSolver); is {
+		if depth, ok := fast.normalDepth(factor); ok {
+			return depth, true
 		}
 	}
-	return depth, true
+	high, most := s.Rise(), math.Inf(1)
+	if s.Closed() {
+		top := crestOf(s)
+		high, most = top.depth, top.factor
+	} else if !math.IsInf(high, 1) {
+		most = sectionFactor(s.At(high))
+	}
+	if factor >= most {
+		return high, factor == most && !flatRoofed(s)
+	}
+	start := normalStart(s, factor)
+	if !(start < high) {
+		start = high * 0.999
+	}
+	return solveDepth(start, high, math.Inf(1), normalFunction(s, factor))
+}
+
+// normalStart is a first guess. A flat floor of width b runs like a wide channel, y = (K/b)^(3/5), where that is shallow;
+// a closed section fills like a circle that carries the same share of its capacity.
+func normalStart(s Section, factor float64) float64 {
+	wide := math.Inf(1)
+	if floor := s.At(0).Perimeter; floor > 0 {
+		wide = math.Exp(0.6 * math.Log(factor/floor))
+	}
+	if s.Closed() && wide > s.Rise()/2 {
+		share := factor / sectionFactor(s.At(s.Rise()))
+		return s.Rise() * circleStart(min(share, crestFlow))
+	}
+	if math.IsInf(wide, 1) {
+		return min(1, s.Rise()/2)
+	}
+	return wide
 }

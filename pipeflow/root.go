@@ -2,34 +2,93 @@ package pipeflow
 
 import "math"
 
-// depthTolerance is the relative accuracy of a depth found by iteration. It is a few hundred times the spacing of
-// floating-point numbers, so that rounding in the section's geometry cannot stop the iteration short of it.
-const depthTolerance = 1e-13
+// A hydraulic function is the logarithm of what a section offers at a depth over what is asked for: it passes zero at the
+// depth that is sought. Given with it is its slope in the logarithm of depth, y df/dy. In these terms the functions of
+// most sections are nearly straight lines, so that depths of any size come out to the same relative accuracy.
+type hydraulic func(depth float64) (value, slope float64)
 
-// solveDepth is the depth in (0, high] at which an increasing function passes zero, given f(high) not under zero and
-// f below zero at small depths. It works in ln y, in which the logarithms of hydraulic functions are nearly straight,
-// so that depths of any size come out to the same relative accuracy.
+const (
+	// lastStep ends Newton's iteration: the error left after a step in ln y is about its square, here 1e-15.
+	lastStep = 3e-8
+	// depthTolerance is the relative accuracy asked of the bracketed search, a few hundred times the spacing of
+	// floating-point numbers, so that rounding in the section's geometry cannot stop it short.
+	depthTolerance = 1e-13
+	// newtonSteps bounds Newton's iteration, which from a usual start needs four; what it cannot do the bracketed search
+	// finishes.
+	newtonSteps = 25
+)
+
+// solveDepth is a depth in (0, high) at which f passes zero going up, from a start between. Given that f is below zero
+// at small depths and not below it at high (+Inf for walls without end) there is one. Newton's steps are taken in
 //
-// No answer: f stays over zero down to the smallest depths, which no finite flow does.
-func solveDepth(high float64, f func(depth float64) float64) (depth float64, ok bool) {
-	atHigh := f(high)
-	if atHigh <= 0 {
-		return high, true
-	}
-	low := high
-	for range 1100 { // 2^-1100 is below the least floating-point number
-		// Hydraulic functions of depth grow at least like y^(3/2), so this step lands below the answer or near it.
-		low = high * max(math.Exp(-atHigh/1.5), 1e-3) / 2
-		atLow := f(low)
-		if !(atLow > 0) {
-			z := root(func(z float64) float64 { return f(math.Exp(z)) },
-				math.Log(low), math.Log(high), atLow, atHigh, depthTolerance)
-			return math.Exp(z), true
+//	z = ln y - ln(1 - y/limit)
+//
+// with the limit +Inf, or the rise where the function is singular under a crown. A step that leaves the bracket is
+// replaced by halving it.
+//
+// No answer: f has no zero in the range of floating-point numbers.
+func solveDepth(start, high, limit float64, f hydraulic) (depth float64, ok bool) {
+	low, y := 0.0, start
+	for range newtonSteps {
+		value, slope := f(y)
+		if value == 0 {
+			return y, true
 		}
-		if low == 0 {
+		if value < 0 {
+			low = y
+		} else {
+			high = y
+		}
+		room := 1 - y/limit
+		step := -value / (slope * room)
+		odds := y / room * math.Exp(step)
+		next := odds / (1 + odds/limit)
+		if math.Abs(step) < lastStep {
+			return next, true
+		}
+		if !(next > low && next < high) {
+			next = between(low, high)
+		}
+		if next == y {
+			return y, true
+		}
+		y = next
+	}
+	return bracketDepth(low, high, f)
+}
+
+// between halves a bracket in ln y; from an open end it goes outward by a factor.
+func between(low, high float64) float64 {
+	const outward = 64
+	switch {
+	case low == 0:
+		return high / outward
+	case math.IsInf(high, 1):
+		return low * outward
+	}
+	return math.Sqrt(low) * math.Sqrt(high)
+}
+
+// bracketDepth finds the zero of f between low and high without its slope, after closing the ends that are still open.
+func bracketDepth(low, high float64, f hydraulic) (depth float64, ok bool) {
+	atZ := func(z float64) float64 {
+		value, _ := f(math.Exp(z))
+		return value
+	}
+	for range 400 { // 64^400 spans all floating-point numbers
+		if low > 0 && !math.IsInf(high, 1) {
+			a, b := math.Log(low), math.Log(high)
+			return math.Exp(root(atZ, a, b, atZ(a), atZ(b), depthTolerance)), true
+		}
+		y := between(low, high)
+		if y == 0 || math.IsInf(y, 1) {
 			break
 		}
-		high, atHigh = low, atLow
+		if value, _ := f(y); value < 0 {
+			low = y
+		} else {
+			high = y
+		}
 	}
 	return 0, false
 }
@@ -38,7 +97,7 @@ func solveDepth(high float64, f func(depth float64) float64) (depth float64, ok 
 //
 // Chandrupatla's method: inverse quadratic interpolation through the last three points where these are known to lie on
 // a curve that may be inverted, halving otherwise (T. R. Chandrupatla, Advances in Engineering Software 28, 1997,
-// 145-149). The bracket never opens; it halves at least every other step in the worst case, hence the bound on the loop.
+// 145-149). The bracket never opens, and halving alone reaches any tolerance within the bound on the loop.
 func root(f func(float64) float64, a, b, fa, fb, tolerance float64) float64 {
 	c, fc := a, fa
 	t := 0.5
@@ -51,12 +110,12 @@ func root(f func(float64) float64, a, b, fa, fb, tolerance float64) float64 {
 			c, b, fc, fb = b, a, fb, fa
 		}
 		a, fa = x, fx
-		best, fbest := a, fa
+		best, atBest := a, fa
 		if math.Abs(fb) < math.Abs(fa) {
-			best, fbest = b, fb
+			best, atBest = b, fb
 		}
 		margin := tolerance / math.Abs(b-a)
-		if fbest == 0 || margin > 0.5 {
+		if atBest == 0 || margin > 0.5 {
 			return best
 		}
 		t = 0.5

@@ -57,6 +57,28 @@ func TestEverySection(t *testing.T) {
 			},
 			Upright: true,
 		},
+		"a trapezoid": {
+			New: func(k float64) (pipeflow.Section, error) { return pipeflow.NewTrapezoid(3*k, 2, 1.5) },
+		},
+		"a triangle": {
+			New:     func(k float64) (pipeflow.Section, error) { return pipeflow.NewTriangle(3, 3) },
+			Upright: true,
+		},
+		"a rectangle": {
+			New:     func(k float64) (pipeflow.Section, error) { return pipeflow.NewRectangle(16 * k) },
+			Upright: true,
+		},
+		"a parabola": {
+			New:     func(k float64) (pipeflow.Section, error) { return pipeflow.NewParabola(4*k, 1*k) },
+			Upright: true,
+		},
+		"a ground line with a bench and two lows": {New: func(k float64) (pipeflow.Section, error) {
+			return pipeflow.NewGround([]pipeflow.Point{
+				{Station: 0, Elevation: 105 * k}, {Station: 4 * k, Elevation: 101 * k}, {Station: 6 * k, Elevation: 100 * k},
+				{Station: 8 * k, Elevation: 100.5 * k}, {Station: 8 * k, Elevation: 102 * k},
+				{Station: 15 * k, Elevation: 101.5 * k}, {Station: 20 * k, Elevation: 106 * k},
+			})
+		}},
 	}
 	for name, shape := range shapes {
 		t.Run(name, func(t *testing.T) { sectiontest.Run(t, shape) })

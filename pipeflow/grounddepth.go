@@ -1,0 +1,61 @@
+package pipeflow
+
+import "math"
+
+// Where a bank is overtopped, width and perimeter of a ground line jump, so that neither A R^(2/3) nor A³/T need grow with
+// depth there. Between the heights of two points both are smooth; the depths are looked for band by band.
+
+// bandParts is into how many steps a band between the heights of two points is cut when zeros are looked for.
+const bandParts = 8
+
+// normalDepth is the least depth at which A R^(2/3) reaches the given value.
+func (g *Ground) normalDepth(factor float64) (depth float64, ok bool) {
+	g.crossings(normalFunction(g, factor), func(y float64) bool {
+		depth, ok = y, true
+		return false
+	})
+	return depth, ok
+}
+
+// criticalDepth is the depth of least specific energy y + Q²/(2gA²) among those where A³/T passes the target Q²/g upward.
+func (g *Ground) criticalDepth(target float64) (depth float64, ok bool) {
+	least := math.Inf(1)
+	g.crossings(criticalFunction(g, target), func(y float64) bool {
+		area := g.At(y).Area
+		if energy := y + target/(2*area*area); energy < least {
+			depth, ok, least = y, true, energy
+		}
+		return true
+	})
+	return depth, ok
+}
+
+// crossings calls visit with each depth at which f passes zero upward, from the lowest on, as long as visit says to go on.
+// At a level bench f may jump over zero, which is then the depth of the bench.
+func (g *Ground) crossings(f hydraulic, visit func(depth float64) bool) {
+	low, atLow := 0.0, math.Inf(-1)
+	for i := range g.levels[1:] {
+		bottom, top := g.levels[i], g.levels[i+1]
+		for part := 1; part <= bandParts; part++ {
+			y := bottom + (top-bottom)*float64(part)/bandParts
+			value, _ := f(y)
+			if atLow < 0 && value >= 0 {
+				if depth, ok := g.cross(low, y, f); ok && !visit(depth) {
+					return
+				}
+			}
+			low, atLow = y, value
+		}
+	}
+}
+
+// cross is the zero between two depths; from the bottom of the line the search goes down as far as it takes.
+func (g *Ground) cross(low, high float64, f hydraulic) (depth float64, ok bool) {
+	if value, _ := f(high); value == 0 {
+		return high, true
+	}
+	if low == 0 {
+		return solveDepth(high/2, high, math.Inf(1), f)
+	}
+	return bracketDepth(low, high, f)
+}
