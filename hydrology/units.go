@@ -87,3 +87,19 @@ func (u Uplifted) At(minutes float64) (intensity float64, where Range) {
 	intensity, where = u.Storm.At(minutes)
 	return u.Factor * intensity, where
 }
+
+// Durations are those of the storm: the corners of its curve, where it has any.
+func (u Uplifted) Durations() []float64 {
+	if c, ok := u.Storm.(corners); ok {
+		return c.Durations()
+	}
+	return nil
+}
+
+// Exponent is that of the storm, which a factor does not change; not ok where the storm has none.
+func (u Uplifted) Exponent(minutes float64) (float64, bool) {
+	if e, ok := u.Storm.(exponent); ok {
+		return e.Exponent(minutes)
+	}
+	return 0, false
+}
