@@ -27,8 +27,8 @@ var (
 	risingHigh = [...]float64{
 		1.523361401, -0.6835659082, 1.347809451, -1.891700445, 2.806069748, -2.571198134, 1.246738833,
 	}
-	// falling: the same beyond the crest, where u counts as negative, down to q = 1 at φ = π. Error 1.5e-5 of the distance.
-	falling = [...]float64{
+	// beyondCrest: the same beyond the crest, where u counts as negative, down to q = 1 at φ = π. Error 1.5e-5 of the distance.
+	beyondCrest = [...]float64{
 		1.523388134, -0.6763120084, 1.785743896, 6.136242948, 78.9014604, 307.6183167, 555.8680782,
 	}
 )
@@ -69,7 +69,7 @@ func (c Circle) upperNormalDepth(factor float64) (depth float64, ok bool) {
 		return 0, false
 	}
 	u := -math.Sqrt(1 - q/crestFlow)
-	ratio, ok := polishNormal(q, crestAngle-u*evaluate(falling[:], u))
+	ratio, ok := polishNormal(q, crestAngle-u*evaluate(beyondCrest[:], u))
 	return c.diameter * min(ratio, 1), ok
 }
 

@@ -74,9 +74,13 @@ func TestEverySection(t *testing.T) {
 		},
 		"a ground line with a bench and two lows": {New: func(k float64) (pipeflow.Section, error) {
 			return pipeflow.NewGround([]pipeflow.Point{
-				{Station: 0, Elevation: 105 * k}, {Station: 4 * k, Elevation: 101 * k}, {Station: 6 * k, Elevation: 100 * k},
-				{Station: 8 * k, Elevation: 100.5 * k}, {Station: 8 * k, Elevation: 102 * k},
-				{Station: 15 * k, Elevation: 101.5 * k}, {Station: 20 * k, Elevation: 106 * k},
+				{Station: 0, Elevation: 105 * k},
+				{Station: 4 * k, Elevation: 101 * k},
+				{Station: 6 * k, Elevation: 100 * k},
+				{Station: 8 * k, Elevation: 100.5 * k},
+				{Station: 8 * k, Elevation: 102 * k},
+				{Station: 15 * k, Elevation: 101.5 * k},
+				{Station: 20 * k, Elevation: 106 * k},
 			})
 		}},
 	}
