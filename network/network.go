@@ -151,3 +151,10 @@ func (n *Network) AreasAt(s StructureIndex) []AreaIndex { return n.here.of(s) }
 func (n *Network) LeastFallAt(s StructureIndex, c *Criteria) float64 {
 	return n.Structures[s].LeastFall.Or(c.LeastFall)
 }
+
+// Clone copies the pipes, so that they can be completed, and shares the rest.
+func (n *Network) Clone() *Network {
+	c := *n
+	c.Pipes = append([]Pipe(nil), n.Pipes...)
+	return &c
+}

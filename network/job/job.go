@@ -95,6 +95,7 @@ func (r *reader) open(name string, required ...string) (*table, bool) {
 	}
 	t, ok := openTable(name, r.path(file), text, r.settings.Columns[name], required, &r.faults)
 	if ok {
+		t.sizeUnit = r.settings.Units.Size
 		r.tables[name] = t
 	}
 	return t, ok

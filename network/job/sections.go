@@ -25,9 +25,7 @@ func (r *reader) sizeAndWall(t *table, row *pipeRow, p *network.Pipe) {
 	}
 	text := strings.TrimSpace(row.Size)
 	if text == "" {
-		if r.purpose == ToCheck {
-			t.faultAt("size", "pipe %s has no size: write it, or let `rimfall size` choose it", p.ID)
-		}
+		r.judgeBlankSize(t, p)
 		return
 	}
 	size, why := parseSize(text, p.Shape, t.comma, r.settings.Units)
@@ -46,6 +44,26 @@ func (r *reader) sizeAndWall(t *table, row *pipeRow, p *network.Pipe) {
 	}
 }
 
+// judgeBlankSize: a pipe that is checked needs a size; one that is to be sized
+// needs sizes to choose from.
+func (r *reader) judgeBlankSize(t *table, p *network.Pipe) {
+	if r.purpose == ToCheck {
+		t.faultAt("size", "pipe %s has no size: write it, or let `rimfall size` choose it", p.ID)
+		return
+	}
+	if len(r.catalog.ForMaterial(r.settings.Units.Name, p.Material, catalog.Shape(p.Shape))) == 0 {
+		t.faultAt("size", "pipe %s has no size, and no %s of %s is in the catalogue to choose from: write the size, or list sizes in %s",
+			p.ID, p.Shape, materialWord(p.Material), r.settings.Files["catalog"])
+	}
+}
+
+func materialWord(material string) string {
+	if material == "" {
+		return "concrete"
+	}
+	return material
+}
+
 // section makes a section once for all pipes that share it.
 func (r *reader) section(key sectionKey) Made {
 	if m, ok := r.sections[key]; ok {
@@ -62,6 +80,25 @@ type Made struct {
 	Wall    float64 // ft or m
 	HasWall bool
 	Why     string // what keeps the section from being made; "" where it was
+}
+
+// Candidate is a size of the catalogue that may be chosen.
+type Candidate struct {
+	Size network.Size
+	Made
+}
+
+// Candidates lists the sizes from which a pipe of a shape and material is chosen.
+func (j *Job) Candidates(shape, material string) []Candidate {
+	u := j.Settings.Units
+	var list []Candidate
+	for _, s := range j.Catalog.ForMaterial(u.Name, material, catalog.Shape(shape)) {
+		size := network.Size{Span: s.Span, Rise: s.Rise}
+		if m := MakeSection(j.Catalog, u.Name, u.SizeFactor, shape, material, size); m.Why == "" {
+			list = append(list, Candidate{size, m})
+		}
+	}
+	return list
 }
 
 // MakeSection makes the section of a shape and size in coherent units: by the

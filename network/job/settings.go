@@ -68,10 +68,12 @@ func defaults(u units.System) Settings {
 		s.FlowUnit = "m3/s"
 		c.MinCover, c.LeastFall, c.MinRise = network.Some(0.3), 0.03, 0.3
 		c.MinVelocity, c.MaxVelocity, c.Freeboard = 0.9, 4.5, 0.3
+		c.MaxRationalArea = network.Some(80)
 	} else {
 		s.FlowUnit = "cfs"
 		c.MinCover, c.LeastFall, c.MinRise = network.Some(1), 0.1, 1
 		c.MinVelocity, c.MaxVelocity, c.Freeboard = 3, 15, 1
+		c.MaxRationalArea = network.Some(200)
 	}
 	return s
 }

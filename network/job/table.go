@@ -57,6 +57,10 @@ type table struct {
 	cells    int      // that the current row really has
 	record   []string // of the current row, evened out
 	lines    []int    // start of each line in text, made when a place is asked for
+
+	renames      map[string]string // field → the user's heading
+	sizeUnit     string            // of sizes that are written
+	decimalComma bool              // numbers are written with a comma
 }
 
 // place is a line and a column of a file, both from 1, in characters.
@@ -75,7 +79,8 @@ func newTable(name, file string, text []byte, faults *fault.List) *table {
 // the table has none, or headings that are unknown, missing or repeated.
 func openTable(name, file string, text []byte, renames map[string]string, required []string, faults *fault.List) (t *table, ok bool) {
 	t = newTable(name, file, text, faults)
-	return t, t.readHeadings() && t.judgeHeadings(renames, required)
+	t.renames = renames
+	return t, t.readHeadings() && t.judgeHeadings(required)
 }
 
 // readHeadings takes the first row that is neither blank nor a comment.
@@ -111,13 +116,13 @@ func separator(text []byte) rune {
 }
 
 // judgeHeadings matches headings with fields.
-func (t *table) judgeHeadings(renames map[string]string, required []string) bool {
+func (t *table) judgeHeadings(required []string) bool {
 	known := tableFields[t.name]
 	byHeading := map[string]string{}
 	for _, f := range known {
 		byHeading[strings.ToLower(f)] = f
 	}
-	for f, h := range renames {
+	for f, h := range t.renames {
 		delete(byHeading, f)
 		byHeading[strings.ToLower(h)] = f
 	}
@@ -140,17 +145,17 @@ func (t *table) judgeHeadings(renames map[string]string, required []string) bool
 			t.column[f], t.fields[i] = i, f
 		}
 	}
-	return t.judgeRequired(renames, required) && good
+	return t.judgeRequired(required) && good
 }
 
-func (t *table) judgeRequired(renames map[string]string, required []string) bool {
+func (t *table) judgeRequired(required []string) bool {
 	good := true
 	for _, f := range required {
 		if _, ok := t.column[f]; ok {
 			continue
 		}
 		heading := f
-		if h := renames[f]; h != "" {
+		if h := t.renames[f]; h != "" {
 			heading = h
 		}
 		t.faults.Add(t.file, t.headLine, 1, "missing column %q", heading)

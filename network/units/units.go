@@ -17,7 +17,7 @@ const (
 	gravityFeet   = gravityMetres / 0.3048
 )
 
-// MinutesPerSecond turns travel times in seconds to minutes when multiplied.
+// SecondsPerMinute turns times in seconds to minutes when they are divided by it.
 const SecondsPerMinute = 60
 
 // System is one system of units with its constants.

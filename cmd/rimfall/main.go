@@ -1,0 +1,10 @@
+// Command rimfall lays out and checks storm drains. Run `rimfall --help`.
+package main
+
+import (
+	"os"
+)
+
+func main() {
+	os.Exit(run(os.Args[1:], os.Stdin, os.Stdout, os.Stderr))
+}

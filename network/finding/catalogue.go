@@ -1,0 +1,190 @@
+package finding
+
+// The sources of the rules: public manuals and codes, by what they were seen to
+// ask. Limits differ by agency, so each is a setting.
+const (
+	common = "common practice"
+)
+
+var rules = []Rule{
+	{
+		"capacity", "over capacity",
+		"the design flow is over the full-bore capacity at the pipe's own slope",
+		"the pipe cannot carry the design storm with a free surface; water backs up into the structures above",
+		Error, "", "Missouri DOT EPG 750.4; Mooresville IN code",
+	},
+	{
+		"depth-ratio", "deeper than allowed",
+		"the depth at design flow is over the allowed part of the rise, though under full-bore capacity",
+		"the spare height that the criteria keep for air and for growth is used up",
+		Error, "max_depth_ratio", common,
+	},
+	{
+		"no-size-carries", "no listed size carries the flow",
+		"every size of the catalogue falls short of the design flow where the pipe must lie; the largest was taken",
+		"more barrels, another shape or a steeper line is needed",
+		Error, "catalog.csv", common,
+	},
+	{
+		"adverse-slope", "level or rising pipe",
+		"the slope is zero or the lower end is higher than the upper end",
+		"such a pipe has no capacity of its own and runs only under a head from above; silt settles in it",
+		Error, "", "Adams County IN code; Vernonia OR Public Works Design Standards section 3",
+	},
+	{
+		"slope", "slope outside the limits",
+		"the slope is under the least or over the greatest allowed",
+		"flat pipes silt up and cannot be built true; steep ones scour and need anchors",
+		Error, "min_slope, max_slope", "Colorado Springs CO DCM vol. 1 ch. 9; Corry PA code 154.134",
+	},
+	{
+		"cleansing-velocity", "too slow to clean itself",
+		"the velocity, flowing full or at design depth as velocity_basis says, is under the least",
+		"sand and silt settle in the pipe and take its capacity",
+		Error, "min_velocity, velocity_basis", "3 ft/s: Vernonia OR section 3; Texas DOT Hydraulic Design Manual ch. 10",
+	},
+	{
+		"cleansing-shear", "too little shear to clean itself",
+		"the boundary shear γRS at design depth is under the least",
+		"shear, not velocity alone, is what moves grains along the bottom",
+		Error, "min_shear", common,
+	},
+	{
+		"high-velocity", "too fast",
+		"the velocity at design flow and its normal depth is over the greatest allowed",
+		"fast water with sand wears the invert, and makes joints, bends and outlets costly",
+		Error, "max_velocity", "10 to 25 ft/s by agency: Adams County IN, Shepherdsville KY ch. 154",
+	},
+	{
+		"cover", "too little cover",
+		"less than the least height lies between the rim and the outside of the pipe",
+		"wheels break shallow pipes, and other services have no room above them",
+		Error, "min_cover", "1 to 3 ft by agency: Missouri DOT EPG 750.4; Lawrenceburg IN code 155.036",
+	},
+	{
+		"deep-cover", "deeper than allowed",
+		"more than the greatest height lies between the rim and the outside of the pipe",
+		"deep trenches are costly and dangerous, and the pipe needs a higher class",
+		Error, "max_cover", common,
+	},
+	{
+		"min-size", "smaller than the least size",
+		"the rise is under the least that the criteria allow",
+		"small pipes clog and cannot be inspected",
+		Error, "min_size", "12 to 15 in by agency: Silverton OR 3.13; Corry PA code 154.134",
+	},
+	{
+		"size-decrease", "smaller than a pipe that enters",
+		"the full area of all barrels is less than that of the largest pipe into its upper structure, which is no split",
+		"what the larger pipe washes along lodges at the narrower one, whatever the capacity",
+		Error, "", common,
+	},
+	{
+		"invert-order", "pipe out above a pipe in",
+		"the invert of a pipe out of a structure is above the invert of a pipe in",
+		"water stands in the structure and in the pipe that enters",
+		Error, "", common,
+	},
+	{
+		"least-fall", "too little fall through a structure",
+		"the invert out lies less than the least fall below the lowest invert in",
+		"the fall makes up for the loss of the structure and for the tolerances of building",
+		Warning, "least_fall", "0.10 ft: Iowa SUDAS ch. 2",
+	},
+	{
+		"size-change", "sizes change without lining up",
+		"where the rise changes, the matched point of the pipe out (crown, invert or 0.8 of the rise) is above that of a pipe in",
+		"the larger pipe backs water up into the smaller one",
+		Warning, "size_change", "crowns: Vernonia OR section 3; 0.8 of the depth: Ten States Standards 2014 section 33",
+	},
+	{
+		"lowest-invert", "below the lowest level allowed",
+		"an end of the pipe lies below the lowest invert of its structure",
+		"what stands there, a receiving bed or a crossing service, does not give way",
+		Error, "lowest_invert", common,
+	},
+	{
+		"bounds-cross", "levels that cannot all be kept",
+		"the lower bound of the upper invert lies above what cover, matched points or least fall allow; the lower bound holds",
+		"one of the given levels has to give",
+		Warning, "lowest_invert, invert_upper, invert_lower", common,
+	},
+	{
+		"drop-structure", "large fall through a structure",
+		"a pipe enters higher above the lowest invert out than the greatest plain drop",
+		"falling water wears the floor and makes entry unsafe; a drop structure is called for",
+		Warning, "max_drop", "24 in: Ten States Standards 2014 section 34",
+	},
+	{
+		"long-pipe", "structures too far apart",
+		"the pipe is longer than the greatest distance between structures",
+		"cleaning equipment does not reach farther",
+		Warning, "max_spacing", "400 ft: Vernonia OR section 3; 500 ft: Silverton OR 3.17",
+	},
+	{
+		"outlet-velocity", "fast outlet",
+		"the velocity of a pipe into an outfall is over the velocity that needs no protection",
+		"the bed below the outlet scours",
+		Warning, "max_outlet_velocity", "6 ft/s: Shepherdsville KY ch. 154",
+	},
+	{
+		"flow-falls", "peak falls downstream",
+		"the peak of the pipe is less than that of a pipe that enters its upper structure, which is no split",
+		"rational peaks belong to different moments; some reviewers want the larger one held (hold_upstream_peak)",
+		Notice, "hold_upstream_peak", common,
+	},
+	{
+		"rational-area", "large area for the Rational method",
+		"the area upstream is over the size to which the method is trusted",
+		"storage and the movement of the storm, which the method leaves out, begin to count",
+		Notice, "max_rational_area", "20 to 200 acres by agency; 240: Vernonia OR section 3",
+	},
+	{
+		"below-first-duration", "shorter than the rainfall table",
+		"the time is shorter than the first duration; its intensity was used",
+		"the true intensity is higher than the one used",
+		Notice, "rainfall.csv", common,
+	},
+	{
+		"time-assumed", "inlet time not given",
+		"the area has no inlet time; the minimum time was used",
+		"the shortest time gives the highest intensity, which is safe but may be wasteful",
+		Notice, "areas.csv time", common,
+	},
+	{
+		"rim-unknown", "no rim",
+		"the structure has no rim; cover and freeboard are not judged there",
+		"what is not judged has to be looked at by hand",
+		Notice, "structures.csv rim", common,
+	},
+	{
+		"levels-unknown", "no inverts",
+		"the pipe has a slope and no inverts; its levels are not judged",
+		"what is not judged has to be looked at by hand",
+		Notice, "pipes.csv invert_upper", common,
+	},
+	{
+		"wall-unknown", "no wall thickness",
+		"the wall is neither given nor in the catalogue; cover counts from the inside of the crown",
+		"the true cover is less by the wall",
+		Notice, "pipes.csv wall, catalog.csv", common,
+	},
+	{
+		"no-flow", "pipe without flow",
+		"no area and no inflow drains to the pipe",
+		"an area may be tied to the wrong structure",
+		Notice, "areas.csv structure", common,
+	},
+	{
+		"unused-outfall", "outfall that nothing reaches",
+		"no pipe enters the outfall",
+		"a pipe may be tied to the wrong structure",
+		Notice, "pipes.csv to", common,
+	},
+	{
+		"departure-unused", "departure that matches nothing",
+		"no finding has the rule and subject of a row of departures.csv",
+		"the design has changed, or the row names the wrong thing",
+		Notice, "departures.csv", common,
+	},
+}

@@ -1,0 +1,66 @@
+package report
+
+import (
+	"strconv"
+
+	"rimfall/network"
+	"rimfall/network/analysis"
+	"rimfall/network/sweep"
+)
+
+// PipeRow is everything that is shown of one pipe for one storm.
+type PipeRow struct {
+	Pipe     *network.Pipe
+	Run      *sweep.Pipe
+	From, To string
+
+	Size                   Value
+	VelocityFull           network.Maybe
+	CriticalDepth, Froude  network.Maybe
+	CoverUpper, CoverLower network.Maybe
+	Remarks                string // names of the rules that found something
+}
+
+// Pipe makes the row of pipe i in a storm of a run.
+func Pipe(r *analysis.Result, storm *analysis.StormRun, i network.PipeIndex) PipeRow {
+	p, run := &r.Network.Pipes[i], &storm.Flows.Pipes[i]
+	row := PipeRow{
+		Pipe: p, Run: run, Size: SizeValue(p),
+		From: r.Network.Structures[p.From].ID, To: r.Network.Structures[p.To].ID,
+		CoverUpper: r.Network.Cover(p, network.Upper), CoverLower: r.Network.Cover(p, network.Lower),
+	}
+	if run.HasCapacity {
+		row.VelocityFull = network.Some(run.Capacity / p.FullArea())
+	}
+	g := r.Job.Settings.Units.Gravity
+	row.CriticalDepth, row.Froude = run.CriticalDepth(p, g), run.Froude(p, g)
+	return row
+}
+
+// SizeValue is a size as it is shown: a number, or span x rise as a text.
+func SizeValue(p *network.Pipe) Value {
+	if p.Shape == "circle" {
+		return N(p.Size.Rise)
+	}
+	return T(SizeText(p))
+}
+
+// SizeText is a size as it is written in pipes.csv, exactly.
+func SizeText(p *network.Pipe) string {
+	exact := func(v float64) string { return strconv.FormatFloat(v, 'f', -1, 64) }
+	if p.Shape == "circle" {
+		return exact(p.Size.Rise)
+	}
+	return exact(p.Size.Span) + "x" + exact(p.Size.Rise)
+}
+
+// Regime is how the pipe runs at its design flow, in one plain word.
+func Regime(run *sweep.Pipe) string { return regimes[run.State] }
+
+var regimes = [...]string{sweep.Dry: "dry", sweep.PartFull: "part-full", sweep.Full: "full"}
+
+// rained gives a value only where an area drains to the pipe.
+func rained(r *PipeRow, v float64) Value { return Value{Number: v, OK: r.Run.Rained()} }
+
+// running gives a value only where water flows.
+func running(r *PipeRow, v float64) Value { return Value{Number: v, OK: r.Run.State != sweep.Dry} }
