@@ -28,8 +28,9 @@ const closureLimit = 0.2
 //
 //	c² + (Rb - v)² = (Rb - Rc)²    and    c² + (Rt - (rise - v))² = (Rt - Rc)²
 //
-// Where the corner arc reaches the widest point, c = span/2 - Rc, v follows from the first and Rt from the second.
-// Otherwise the crown is more than a half circle, Rt = span/2, and both give c and v.
+// Where the corner arc holds the widest point, c = span/2 - Rc, v follows from the first and Rt from the second. Where
+// that puts the crown's centre above the corner's, the crown is more than a half circle and holds it instead: Rt =
+// span/2, and both give c and v.
 //
 // Error: a length that is none, radii that leave no room for the corner arcs, or a crown radius that would have to
 // change by more than a fifth.
@@ -45,10 +46,10 @@ func NewArch(span, rise, bottomRadius, topRadius, cornerRadius float64) (*Arch, 
 	}
 	up := bottomRadius - math.Sqrt(lift)
 	closing := touchingRadius(across, rise-up, cornerRadius)
-	if !(closing >= span/2) {
+	if up < rise-closing { // the crown's centre is above the corner's, so the crown is wider
 		across, up, closing = roundCrown(span, rise, bottomRadius, cornerRadius)
 	}
-	if !(up > cornerRadius) || !(up < rise) || !(across >= 0) {
+	if !(up > cornerRadius) || !(rise-up > cornerRadius) || !(across >= 0) {
 		return nil, fmt.Errorf("pipeflow: span %v, rise %v, bottom radius %v and corner radius %v do not close to an arch",
 			span, rise, bottomRadius, cornerRadius)
 	}

@@ -54,18 +54,28 @@ func (b Box) criticalDepth(target float64) (depth float64, ok bool) {
 //
 //	v⁵/(1 + 2v)² = c    c = K³/b⁸
 //
-// which is K = A R^(2/3) of the rectangle, cubed. The start w (1 + 2.4 w + 4 w²)^(1/3), w = c^(1/5), has the right first
-// two terms for wide flow and the right limit (4c)^(1/3) for deep flow; between it is up to 4.8 % high. Two third-order
-// steps on the logarithm in ln v leave 1e-6, then less than rounding.
+// which is K = A R^(2/3) of the rectangle, cubed. From the start, two third-order steps on the logarithm in ln v leave
+// 1e-6, then less than rounding.
 func (b Box) normalDepth(factor float64) (depth float64, ok bool) {
-	share := factor / (b.span * b.span)
-	c := share * share * share / (b.span * b.span)
-	w := math.Exp(math.Log(c) / 5)
-	v := w * math.Cbrt(1+2.4*w+4*w*w)
+	c := rectangleConstant(b.span, factor)
+	v := rectangleStart(c)
 	v *= boxStep(v, math.Log(boxRatio(v, c)))
 	v *= boxStep(v, logarithm(boxRatio(v, c)))
 	depth = b.span * v
 	return depth, depth < b.rise
+}
+
+// rectangleConstant is K³/b⁸.
+func rectangleConstant(width, factor float64) float64 {
+	share := factor / (width * width)
+	return share * share * share / (width * width)
+}
+
+// rectangleStart is w (1 + 2.4 w + 4 w²)^(1/3), w = c^(1/5): it has the right first two terms for wide flow and the right
+// limit (4c)^(1/3) for deep flow; between it is up to 4.8 % high.
+func rectangleStart(c float64) float64 {
+	w := math.Exp(math.Log(c) / 5)
+	return w * math.Cbrt(1+2.4*w+4*w*w)
 }
 
 // boxRatio is v⁵/(1 + 2v)² over c.

@@ -47,22 +47,21 @@ func criticalFactor(g Geometry) float64 {
 	return g.Area * g.Area * (g.Area / g.TopWidth)
 }
 
-// criticalStart is a first guess. Over a flat floor of width b, y = (Q²/(g b²))^(1/3) where that is shallow; a closed
-// section fills like a circle of the same A³/T, with the full area and the span in it.
+// criticalStart is a first guess, as for normal depth: a rectangle, y = (Q²/(g b²))^(1/3), or a circle of the same A³/T
+// with the full area and the span in it.
 func criticalStart(s Section, target float64) float64 {
-	wide := math.Inf(1)
-	if floor := s.At(0).TopWidth; floor > 0 {
-		wide = math.Cbrt(target / floor / floor)
+	if width := s.At(0).TopWidth; width > 0 {
+		if s.Closed() {
+			width = s.Span()
+		}
+		return math.Cbrt(target / width / width)
 	}
-	if s.Closed() && wide > s.Rise()/2 {
+	if s.Closed() {
 		full := s.At(s.Rise()).Area
 		circle := math.Pi * math.Pi * math.Pi / 64 // A³/T with the full area and the diameter, over D⁵
 		return s.Rise() * criticalGuess(64*circle*target/full*s.Span()/full/full)
 	}
-	if math.IsInf(wide, 1) {
-		return min(1, s.Rise()/2)
-	}
-	return wide
+	return min(1, s.Rise()/2)
 }
 
 // flatRoofed reports whether the roof of a closed section has a width: whether just below it the section is still wide.

@@ -36,7 +36,7 @@ func (Box) growth(float64) growth { return growth{perimeter: 2} }
 func (o *Outline) growth(depth float64) growth {
 	p := o.pieceAt(depth)
 	if p.radius == 0 {
-		return growth{2 * math.Sqrt(1+p.lean*p.lean), 2 * p.lean}
+		return growth{2 * p.stretch, 2 * p.lean}
 	}
 	return arcGrowth(2*p.radius, depth-p.low, p.high-depth)
 }

@@ -47,19 +47,18 @@ func depthOfFactor(s Section, factor float64) (depth float64, ok bool) {
 	return solveDepth(start, high, math.Inf(1), normalFunction(s, factor))
 }
 
-// normalStart is a first guess. A flat floor of width b runs like a wide channel, y = (K/b)^(3/5), where that is shallow;
-// a closed section fills like a circle that carries the same share of its capacity.
+// normalStart is a first guess. Over a flat floor a section runs nearly like a rectangle of its span, or of its floor where
+// the walls lean out without end; another closed section fills like a circle that carries the same share of its capacity.
 func normalStart(s Section, factor float64) float64 {
-	wide := math.Inf(1)
-	if floor := s.At(0).Perimeter; floor > 0 {
-		wide = math.Exp(0.6 * math.Log(factor/floor))
+	if width := s.At(0).TopWidth; width > 0 {
+		if s.Closed() {
+			width = s.Span()
+		}
+		return width * rectangleStart(rectangleConstant(width, factor))
 	}
-	if s.Closed() && wide > s.Rise()/2 {
+	if s.Closed() {
 		share := factor / sectionFactor(s.At(s.Rise()))
 		return s.Rise() * circleStart(min(share, crestFlow))
 	}
-	if math.IsInf(wide, 1) {
-		return min(1, s.Rise()/2)
-	}
-	return wide
+	return min(1, s.Rise()/2)
 }

@@ -25,6 +25,7 @@ type piece struct {
 	centre     float64 // x of the arc's centre
 	low, high  float64 // heights of the lowest and the highest point of the arc's circle
 	foot, lean float64 // of a line
+	stretch    float64 // length of a line for a unit of height
 
 	area, perimeter, moment float64 // of the half section up to the bottom of the piece
 }
@@ -36,6 +37,7 @@ func newOutline(floor, roof float64, pieces []piece) *Outline {
 	moment := 0.0
 	for i := range pieces {
 		p := &pieces[i]
+		p.stretch = math.Sqrt(1 + p.lean*p.lean)
 		p.area, p.perimeter, p.moment = half.Area, half.Perimeter, moment
 		o.span = max(o.span, 2*p.widest())
 		half, moment = p.half(p.top), p.halfMoment(p.top)
@@ -92,7 +94,7 @@ func (p *piece) half(y float64) Geometry {
 	if p.radius == 0 {
 		return Geometry{
 			Area:      p.area + rise*(p.foot+p.lean*rise/2),
-			Perimeter: p.perimeter + rise*math.Sqrt(1+p.lean*p.lean),
+			Perimeter: p.perimeter + rise*p.stretch,
 			TopWidth:  p.foot + p.lean*rise,
 		}
 	}

@@ -93,12 +93,19 @@ func bracketDepth(low, high float64, f hydraulic) (depth float64, ok bool) {
 	return 0, false
 }
 
-// root is the place between a and b where f passes zero, to the absolute tolerance; f(a) and f(b) have opposite signs.
+// root is the place between a and b where f passes zero, to the absolute tolerance; f(a) and f(b) have opposite signs,
+// or one of them is zero.
 //
 // Chandrupatla's method: inverse quadratic interpolation through the last three points where these are known to lie on
 // a curve that may be inverted, halving otherwise (T. R. Chandrupatla, Advances in Engineering Software 28, 1997,
 // 145-149). The bracket never opens, and halving alone reaches any tolerance within the bound on the loop.
 func root(f func(float64) float64, a, b, fa, fb, tolerance float64) float64 {
+	if fa == 0 {
+		return a
+	}
+	if fb == 0 {
+		return b
+	}
 	c, fc := a, fa
 	t := 0.5
 	for range 200 {

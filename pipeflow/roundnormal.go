@@ -5,9 +5,9 @@ import "math"
 // The crest of the circle with constant n, where d(A^5/P^2)/dφ = 0, that is 5 φ sin²φ = φ - sin φ cos φ. Solved to 30
 // digits; the rounded values are well known (Chow 1959, section 6-4: depth 0.938 D, 1.076 of full-bore capacity).
 const (
-	crestAngle = 2.6390535689676898 // φ
+	crestAngle = 2.6390535689668978 // φ
 	crestRatio = 0.9381812161606071 // y/D
-	crestFlow  = 1.0757061294046448 // Q/Qfull
+	crestFlow  = 1.0757061294004648 // Q/Qfull
 )
 
 // circleFactor is A R^(2/3) of a full circle of diameter 1: (π/4) (1/4)^(2/3).
