@@ -142,6 +142,7 @@ func TestSectionsThatCannotBe(t *testing.T) {
 		{"an ellipse flatter than 10 to 1", second(pipeflow.NewEllipse(11, 1)), "flatter than 10 to 1"},
 		{"an arch with too small a bottom radius", second(pipeflow.NewArch(36, 22, 10, 0, 6)), "bottom radius"},
 		{"an arch with too large corners", second(pipeflow.NewArch(36, 22, 51, 0, 17.9)), "do not close"},
+		{"an arch a million times wider than high", second(pipeflow.NewArch(81081, 0.07, 113513, 0, 0.0056)), "do not close"},
 		{"an arch whose crown radius is another's", second(pipeflow.NewArch(36, 22, 51, 40, 6)), "does not close"},
 		{"an oval with too large a small radius", third(pipeflow.NewOval(60, 38, 0, 20)), "under 19"},
 		{"a channel without width or sides", second(pipeflow.NewTrapezoid(0, 0, 0)), "over 0"},

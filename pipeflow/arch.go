@@ -46,10 +46,12 @@ func NewArch(span, rise, bottomRadius, topRadius, cornerRadius float64) (*Arch, 
 	}
 	up := bottomRadius - math.Sqrt(lift)
 	closing := touchingRadius(across, rise-up, cornerRadius)
+	closes := closing > cornerRadius
 	if up < rise-closing { // the crown's centre is above the corner's, so the crown is wider
 		across, up, closing = roundCrown(span, rise, bottomRadius, cornerRadius)
+		closes = up < rise-closing
 	}
-	if !(up > cornerRadius) || !(rise-up > cornerRadius) || !(across >= 0) {
+	if !closes || !(up > cornerRadius) || !(rise-up > cornerRadius) || !(across >= 0) {
 		return nil, fmt.Errorf("pipeflow: span %v, rise %v, bottom radius %v and corner radius %v do not close to an arch",
 			span, rise, bottomRadius, cornerRadius)
 	}

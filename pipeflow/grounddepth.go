@@ -31,13 +31,17 @@ func (g *Ground) criticalDepth(target float64) (depth float64, ok bool) {
 }
 
 // crossings calls visit with each depth at which f passes zero upward, from the lowest on, as long as visit says to go on.
-// At a level bench f may jump over zero, which is then the depth of the bench.
+// Each band is followed from just over the point at its bottom to just under the one at its top, as a level bench there
+// makes f jump.
 func (g *Ground) crossings(f hydraulic, visit func(depth float64) bool) {
 	low, atLow := 0.0, math.Inf(-1)
 	for i := range g.levels[1:] {
-		bottom, top := g.levels[i], g.levels[i+1]
-		for part := 1; part <= bandParts; part++ {
+		bottom, top := g.levels[i], g.levels[i+1]*underRoof
+		for part := range bandParts + 1 {
 			y := bottom + (top-bottom)*float64(part)/bandParts
+			if y == 0 {
+				continue
+			}
 			value, _ := f(y)
 			if atLow < 0 && value >= 0 {
 				if depth, ok := g.cross(low, y, f); ok && !visit(depth) {

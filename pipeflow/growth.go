@@ -58,12 +58,14 @@ func wallGrowth(lean float64) growth {
 	return growth{perimeter: 2 * math.Sqrt(1+lean*lean), width: 2 * lean}
 }
 
-// normalFunction is ln(A R^(2/3) / factor); its slope is y (5/3 T/A - 2/3 P'/P).
+// normalFunction is ln(A R^(2/3) / factor), a third of the logarithm of its cube, which needs no root; its slope is
+// y (5/3 T/A - 2/3 P'/P).
 func normalFunction(s Section, factor float64) hydraulic {
 	grower := growthOf(s)
 	return func(y float64) (value, slope float64) {
 		wet, grows := s.At(y), grower.growth(y)
-		value = math.Log(sectionFactor(wet) / factor)
+		r, share := wet.Area/wet.Perimeter, wet.Area/factor
+		value = ln(r*share*r*share*share) / 3
 		return value, y * (5*wet.TopWidth/wet.Area - 2*grows.perimeter/wet.Perimeter) / 3
 	}
 }
@@ -73,7 +75,7 @@ func criticalFunction(s Section, target float64) hydraulic {
 	grower := growthOf(s)
 	return func(y float64) (value, slope float64) {
 		wet, grows := s.At(y), grower.growth(y)
-		value = math.Log(criticalFactor(wet) / target)
+		value = ln(criticalFactor(wet) / target)
 		return value, y * (3*wet.TopWidth/wet.Area - grows.width/wet.TopWidth)
 	}
 }

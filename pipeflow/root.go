@@ -41,7 +41,7 @@ func solveDepth(start, high, limit float64, f hydraulic) (depth float64, ok bool
 		}
 		room := 1 - y/limit
 		step := -value / (slope * room)
-		odds := y / room * math.Exp(step)
+		odds := y / room * exp(step)
 		next := odds / (1 + odds/limit)
 		if math.Abs(step) < lastStep {
 			return next, true

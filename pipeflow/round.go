@@ -1,5 +1,7 @@
 package pipeflow
 
+import "math"
+
 // A circle has one shape for all diameters, so normal and critical depth are each one function of one number. Both are
 // found here in the half central angle φ = θ/2 of the water line, in which neither end of the circle is singular: a
 // fitted polynomial is within a few hundred-thousandths, and one third-order step makes that exact to rounding.
@@ -44,6 +46,23 @@ func thirdOrder(value, first, second float64) float64 {
 func logarithm(ratio float64) float64 {
 	e := ratio - 1
 	return e * (1 - e*(1./2-e*(1./3-e/4)))
+}
+
+// ln is the logarithm, short where the ratio is close to 1.
+func ln(ratio float64) float64 {
+	if math.Abs(ratio-1) < 1e-3 {
+		return logarithm(ratio)
+	}
+	return math.Log(ratio)
+}
+
+// exp is the exponential, short for a short step: below a hundredth it is within 2e-7, which the next step of an iteration
+// makes good, and below a millionth exact.
+func exp(step float64) float64 {
+	if math.Abs(step) < 0.01 {
+		return 1 + step*(1+step/2)
+	}
+	return math.Exp(step)
 }
 
 // evaluate sums a power series in x by Horner's rule.
