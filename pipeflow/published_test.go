@@ -184,3 +184,23 @@ func TestDepthsOfNineLines(t *testing.T) {
 		}
 	}
 }
+
+// TestConcreteArches builds sixteen sizes of concrete arch pipe from span, rise, bottom and corner radius. Their crown
+// radius, which follows, and their area were set down apart from one another (from memory of ASTM C506): the radius comes
+// out within 1.3 %, the area within 1.8 %, the printed ones being rounded to two or three digits.
+func TestConcreteArches(t *testing.T) {
+	for _, row := range table(t, "arch-concrete.csv") {
+		value := func(heading string) float64 {
+			v, _ := number(t, row, heading)
+			return v
+		}
+		arch, err := pipeflow.NewArch(value("span"), value("rise"),
+			value("bottom_radius"), value("top_radius"), value("corner_radius"))
+		if err != nil {
+			t.Errorf("%v: %v", row, err)
+			continue
+		}
+		hold(t, row, "top_radius", arch.TopRadius, 0.013, 0)
+		hold(t, row, "area_ft2", arch.At(arch.Rise()).Area/144, 0.018, 0)
+	}
+}

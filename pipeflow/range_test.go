@@ -132,3 +132,33 @@ func TestTwoLowsOfOneGroundLine(t *testing.T) {
 		}
 	}
 }
+
+// TestTheEndsOfTheFallingBranch: with a round crown two depths carry full-bore capacity, the upper being the rise, and at
+// the largest discharge they are one. Under a flat roof there is one depth only, all the way up to the roof.
+func TestTheEndsOfTheFallingBranch(t *testing.T) {
+	for name, s := range pipes() {
+		full, largest, crest := sewer.FullFlow(s), 0.0, 0.0
+		largest, crest, _ = sewer.LargestFlow(s)
+		under := sewer.Flow(s, s.Rise()*(1-1e-6)) // what it carries just before the roof is wet
+		atFull, between := sewer.NormalDepths(s, full), sewer.NormalDepths(s, under+0.9*(largest-under))
+		flat := name == "box" || name == "haunched"
+		switch {
+		case flat && (atFull.Count != 1 || between.Count != 1 || crest != s.Rise()):
+			t.Errorf("%s: %+v at full-bore capacity, %+v above, largest at %v", name, atFull, between, crest)
+		case name == "octagon": // its crest is below a small flat roof: two depths only above what it carries under the roof
+			if between.Count != 2 || between.Upper >= s.Rise() || crest >= s.Rise() {
+				t.Errorf("%s: %+v above full-bore capacity, largest at %v", name, between, crest)
+			}
+		case !flat && (atFull.Count != 2 || !near(atFull.Upper, s.Rise(), 1e-12) || between.Count != 2):
+			t.Errorf("%s: %+v at full-bore capacity, %+v above", name, atFull, between)
+		}
+		top := sewer.NormalDepths(s, largest*(1-1e-13))
+		if !flat && (top.Count != 2 || !near(top.Lower, crest, 1e-5) || !near(top.Upper, crest, 1e-5)) {
+			t.Errorf("%s: %+v at the largest discharge, which is at %v", name, top, crest)
+		}
+		if fast := sewer.DepthsOfVelocity(s, sewer.FullVelocity(s)); !flat && name != "octagon" &&
+			(fast.Count != 2 || !near(fast.Upper, s.Rise(), 1e-12)) {
+			t.Errorf("%s: %+v at full-bore velocity", name, fast)
+		}
+	}
+}
