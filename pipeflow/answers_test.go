@@ -163,3 +163,20 @@ func TestSectionsThatCannotBe(t *testing.T) {
 func second[S any](_ S, err error) error { return err }
 
 func third[S, T any](_ S, _ T, err error) error { return err }
+
+func TestZeroValuesCarryNothing(t *testing.T) {
+	for name, s := range map[string]pipeflow.Section{"circle": pipeflow.Circle{}, "box": pipeflow.Box{}} {
+		if s.At(1) != (pipeflow.Geometry{}) || s.Moment(1) != 0 || sewer.FullFlow(s) != 0 {
+			t.Errorf("%s: %+v, moment %v, flow %v", name, s.At(1), s.Moment(1), sewer.FullFlow(s))
+		}
+		if _, ok := sewer.NormalDepth(s, 1); ok {
+			t.Errorf("%s: has a normal depth", name)
+		}
+		if _, ok := pipeflow.CriticalDepth(s, gravity, 1); ok {
+			t.Errorf("%s: has a critical depth", name)
+		}
+	}
+	if n := (pipeflow.Geometry{}).HydraulicRadius(); n != 0 {
+		t.Errorf("hydraulic radius of nothing: %v", n)
+	}
+}

@@ -49,11 +49,13 @@ func falling(s Section, f hydraulic, crest float64) (depth float64, ok bool) {
 	case atTop >= -rounding:
 		return top, true
 	}
-	value := func(y float64) float64 {
-		v, _ := f(y)
-		return v
+	// The perimeter grows like w = √(top - y) below a crown, so it is in w that the function is smooth.
+	inRoot := func(w float64) float64 {
+		value, _ := f(top - w*w)
+		return value
 	}
-	return root(value, crest, top, atCrest, atTop, depthTolerance*top), true
+	w := root(inRoot, 0, math.Sqrt(top-crest), atTop, atCrest, 0.1*depthTolerance*math.Sqrt(top))
+	return top - w*w, true
 }
 
 // DepthsOfVelocity are the depths at which uniform flow has a mean velocity: two from the velocity at full-bore capacity

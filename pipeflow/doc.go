@@ -14,6 +14,24 @@
 //	Froude       F = V / √(g A/T)                 Chow 1959, eq. 1-14 with the hydraulic depth A/T
 //	shear        τ = γ R S                        Chow 1959, section 7-4
 //
+// # Questions
+//
+//	how much, how fast at a depth      Manning.Flow, Velocity, FullFlow, FullVelocity
+//	how deep                           Manning.NormalDepth, NormalDepths, DepthsOfVelocity
+//	what slope, roughness, size        Manning.SlopeFor, SlopeForVelocity, RoughnessFor, ScaleFor, ScaleForVelocity, LengthFor
+//	the most it carries                Manning.LargestFlow, LargestVelocity
+//	critical state                     CriticalDepth, Froude, Manning.CriticalSlope
+//	energy and jump                    SpecificEnergy, AlternateDepth, SpecificForce, ConjugateDepth
+//	scour and deposit                  Shear
+//	roughness that varies              Varying, Manning.PartFull, Manning.Composite, HortonN, LotterN
+//	why there is no answer             Manning.WhyNoNormalDepth, WhyNoVelocityDepth, WhyNoCriticalDepth
+//
+// # Accuracy
+//
+// Every shape was compared with integrals in 30 digits at depths from 1e-6 to 0.99 of the rise: area, perimeter, top width
+// and first moment differ by no more than 9e-15 of their value. Normal and critical depth were compared with an independent
+// root finder on those integrals: no more than 3e-15. See [Manning.NormalDepth] and [CriticalDepth] for their own ranges.
+//
 // # What it leaves out
 //
 // Energy losses along a pipe, water surface profiles and anything that knows of a network.
