@@ -136,3 +136,16 @@ func (c Catalog) Wall(units, material string, shape Shape, span, rise float64) (
 	}
 	return s.Wall, true
 }
+
+// Nearest is the listed size of a material's first series whose span and rise are least off by their ratios: what to offer
+// for a size that is not listed. There is none where the material is not made in that shape.
+func (c Catalog) Nearest(units, material string, shape Shape, span, rise float64) (Size, bool) {
+	rows := c.ForMaterial(units, material, shape)
+	if len(rows) == 0 || !(span > 0) || !(rise > 0) {
+		return Size{}, false
+	}
+	off := func(s Size) float64 {
+		return math.Abs(math.Log(s.Span/span)) + math.Abs(math.Log(s.Rise/rise))
+	}
+	return slices.MinFunc(rows, func(a, b Size) int { return cmp.Compare(off(a), off(b)) }), true
+}

@@ -116,8 +116,7 @@ func TestEveryRowIsCompleteAndItsSectionStands(t *testing.T) {
 		}
 		per, _ := perUnit(s.Units)
 		span, rise := s.Span/per, s.Rise/per
-		// The span may be off by 0.3 %: radii of the smallest pipe-arches close no better.
-		if !near(section.Span(), span, 3e-3) || !near(section.Rise(), rise, 1e-12) {
+		if !near(section.Span(), span, 1e-12) || !near(section.Rise(), rise, 1e-12) {
 			t.Errorf("%s %s: section %g x %g", s.Shape, s.Label(), section.Span(), section.Rise())
 		}
 		// Every inside lies within its box and holds the rhombus of its span and rise.
@@ -201,5 +200,28 @@ func TestTheZeroCatalogIsEmpty(t *testing.T) {
 	var c Catalog
 	if _, ok := c.Wall(US, "", Circle, 12, 12); ok || len(c.Sizes("", "")) > 0 || len(c.Default(US)) > 0 {
 		t.Error("the zero catalogue has sizes")
+	}
+}
+
+func TestTheNearestListedSizeIsOffered(t *testing.T) {
+	cases := []struct {
+		name       string
+		shape      Shape
+		span, rise float64
+		want       string
+	}{
+		{"a diameter between two sizes", Circle, 37, 37, "36"},
+		{"an arch with its span rounded", Arch, 58, 36, "58.5x36"},
+		{"a diameter far over the largest", Circle, 900, 900, "144"},
+	}
+	for _, c := range cases {
+		t.Run(c.name, func(t *testing.T) {
+			if s, ok := Nearest(US, "", c.shape, c.span, c.rise); !ok || s.Label() != c.want {
+				t.Errorf("%s, %v, want %s", s.Label(), ok, c.want)
+			}
+		})
+	}
+	if _, ok := Nearest(US, "brick", Circle, 36, 36); ok {
+		t.Error("a size of brick, which is in no list")
 	}
 }

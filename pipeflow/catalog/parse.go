@@ -83,7 +83,13 @@ func readSize(at row, units string, decimal byte) (Size, []Fault) {
 	if len(n.faults) > 0 {
 		return s, n.faults
 	}
-	return s, judge(s, at)
+	faults := judge(s, at)
+	if len(faults) == 0 {
+		if _, err := s.Section(); err != nil {
+			faults = []Fault{at["span"].fault("%s makes no section: %v", s.Label(), err)}
+		}
+	}
+	return s, faults
 }
 
 // numbers reads number cells and collects their faults.

@@ -47,6 +47,7 @@ func TestEveryFaultHasItsPlaceAndSaysWhatWouldDo(t *testing.T) {
 		{"a lying ellipse that stands", "shape,span,rise\nellipse,12,19\n", "2:9: span 12 is under rise 19"},
 		{"an upright ellipse that lies", "shape,span,rise\nellipse-upright,19,12\n", "2:17: span 19 is over rise 12"},
 		{"an arch without radii", "shape,span,rise\narch,60,36\n", "2:1: an arch needs bottom_radius"},
+		{"an arch whose radii do not close", "shape,span,rise,bottom_radius,top_radius,corner_radius\narch,60,36,84,90,9\n", "2:6: 60x36 makes no section"},
 		{"a circle with radii", "shape,span,top_radius\ncircle,60,36\n", "only an arch or a pipe-arch has radii"},
 		{"a circle with haunches", "shape,span,haunch\ncircle,60,6\n", "2:11: only a box has haunches"},
 		{"haunches that meet", "shape,span,rise,haunch\nbox,60,36,19\n", "2:11: haunch 19 is over half"},

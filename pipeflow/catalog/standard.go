@@ -52,3 +52,8 @@ func Find(units, material string, shape Shape, span, rise float64) (Size, bool) 
 func Wall(units, material string, shape Shape, span, rise float64) (thickness float64, ok bool) {
 	return Standard().Wall(units, material, shape, span, rise)
 }
+
+// Nearest is [Catalog.Nearest] of the standard catalogue.
+func Nearest(units, material string, shape Shape, span, rise float64) (Size, bool) {
+	return Standard().Nearest(units, material, shape, span, rise)
+}

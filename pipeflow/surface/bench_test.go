@@ -47,7 +47,8 @@ func BenchmarkProfile(b *testing.B) {
 // load of the machine; it reports their ratio.
 func measureProfile(b *testing.B, pipe Pipe, flow float64, c Control) {
 	const batch = 100
-	circle, _ := pipeflow.NewCircle(3)
+	round, _ := pipeflow.NewCircle(3)
+	var circle pipeflow.Section = round
 	uniform := pipeflow.Manning{Factor: 1.486, N: 0.013, Slope: 0.002}
 	var p Profile
 	var surfaces, depths time.Duration

@@ -37,10 +37,7 @@ func (w *water) measure(p *path, sign, from, width float64) panel {
 		behind, ahead := weight*w.speed(p, middle-reach), weight*w.speed(p, middle+reach)
 		m.add(nodes[i], ahead+behind, ahead-behind)
 	}
-	for j := range m.series {
-		m.series[j] *= float64(2*j+1) / 2
-	}
-	m.length = 2 * m.series[0]
+	m.finish()
 	return m
 }
 
@@ -59,6 +56,14 @@ func (m *panel) add(t, sum, difference float64) {
 	m.series[3] += difference * t * (5*t2 - 3) / 2
 	m.series[4] += sum * ((35*t2-30)*t2 + 3) / 8
 	m.series[5] += difference * t * ((63*t2-70)*t2 + 15) / 8
+}
+
+// finish turns the projections into coefficients: the square of P[j] has the integral 2/(2j+1).
+func (m *panel) finish() {
+	for j := range m.series {
+		m.series[j] *= float64(2*j+1) / 2
+	}
+	m.length = 2 * m.series[0]
 }
 
 // roughness is the size of the last two terms against the mean: how far the series is from having died away.
