@@ -35,13 +35,13 @@ func crestOf(s Section) crest {
 // the top of a curve being flat, and then takes the zero of the slope there.
 func findCrest(s Section) crest {
 	best := searchCrest(s)
-	_, slope := normalFunction(s, best.factor)(s.Rise() * underRoof)
+	_, slope, _ := normalFunction(s, best.factor)(s.Rise() * underRoof)
 	if slope > 0 {
 		return best // it still rises below a flat roof
 	}
 	const near = 1e-6
 	rate := func(y float64) float64 {
-		_, slope := normalFunction(s, best.factor)(y)
+		_, slope, _ := normalFunction(s, best.factor)(y)
 		return -slope
 	}
 	low, high := best.depth*(1-near), min(best.depth*(1+near), s.Rise()*underRoof)

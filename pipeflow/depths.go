@@ -41,8 +41,8 @@ func falling(s Section, f hydraulic, crest float64) (depth float64, ok bool) {
 	if flatRoofed(s) {
 		top *= underRoof
 	}
-	atCrest, _ := f(crest)
-	atTop, _ := f(top)
+	atCrest, _, _ := f(crest)
+	atTop, _, _ := f(top)
 	switch {
 	case crest >= top || atCrest < 0 || atTop > rounding:
 		return 0, false
@@ -51,7 +51,7 @@ func falling(s Section, f hydraulic, crest float64) (depth float64, ok bool) {
 	}
 	// The perimeter grows like w = √(top - y) below a crown, so it is in w that the function is smooth.
 	inRoot := func(w float64) float64 {
-		value, _ := f(top - w*w)
+		value, _, _ := f(top - w*w)
 		return value
 	}
 	w := root(inRoot, 0, math.Sqrt(top-crest), atTop, atCrest, 0.1*depthTolerance*math.Sqrt(top))
@@ -75,7 +75,7 @@ func (m Manning) DepthsOfVelocity(s Section, velocity float64) Depths {
 		high = deepestRadius(s)
 	}
 	if !math.IsInf(high, 1) {
-		if value, _ := f(high); value < 0 {
+		if value, _, _ := f(high); value < 0 {
 			return Depths{}
 		}
 	}

@@ -144,7 +144,7 @@ func (s *slab) moment(y float64) float64 {
 }
 
 func (g *Ground) growth(depth float64) growth {
-	var total growth
+	var total growth // without bends: all slabs are straight
 	for i := range g.slabs {
 		s := &g.slabs[i]
 		if _, _, share := s.wet(depth); share > 0 && share < 1 {

@@ -42,7 +42,7 @@ func (g *Ground) crossings(f hydraulic, visit func(depth float64) bool) {
 			if y == 0 {
 				continue
 			}
-			value, _ := f(y)
+			value, _, _ := f(y)
 			if atLow < 0 && value >= 0 {
 				if depth, ok := g.cross(low, y, f); ok && !visit(depth) {
 					return
@@ -55,11 +55,11 @@ func (g *Ground) crossings(f hydraulic, visit func(depth float64) bool) {
 
 // cross is the zero between two depths; from the bottom of the line the search goes down as far as it takes.
 func (g *Ground) cross(low, high float64, f hydraulic) (depth float64, ok bool) {
-	if value, _ := f(high); value == 0 {
+	if value, _, _ := f(high); value == 0 {
 		return high, true
 	}
 	if low == 0 {
 		return solveDepth(high/2, high, math.Inf(1), f)
 	}
-	return bracketDepth(low, high, f)
+	return bracketDepth(low, high, valueOf(f))
 }

@@ -1,7 +1,5 @@
 package pipeflow
 
-import "math"
-
 // LargestFlow is the largest discharge of a closed section flowing part full and the depth at which it runs. In a circle
 // that is 1.0757 of full-bore capacity at 0.9382 of the diameter. Under a flat roof it is a limit that is not reached:
 // the depth is the rise, the flow the one just before the roof is wet.
@@ -40,7 +38,7 @@ func deepestRadius(s Section) float64 {
 	roof := s.Rise() * underRoof
 	f := radiusFunction(s, 1)
 	rate := func(y float64) float64 {
-		_, slope := f(y)
+		_, slope, _ := f(y)
 		return -slope
 	}
 	low := s.Rise() / 4
@@ -49,14 +47,4 @@ func deepestRadius(s Section) float64 {
 		return roof
 	}
 	return root(rate, low, roof, atLow, atRoof, depthTolerance*s.Rise())
-}
-
-// radiusFunction is ln(R^(2/3) / factor); its slope is y 2/3 (T/A - P'/P).
-func radiusFunction(s Section, factor float64) hydraulic {
-	grower := growthOf(s)
-	return func(y float64) (value, slope float64) {
-		wet, grows := s.At(y), grower.growth(y)
-		value = math.Log(radiusFactor(wet) / factor)
-		return value, y * 2 / 3 * (wet.TopWidth/wet.Area - grows.perimeter/wet.Perimeter)
-	}
 }

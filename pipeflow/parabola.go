@@ -47,7 +47,3 @@ func (c Parabola) Moment(depth float64) float64 {
 	y := clampDepth(depth, math.Inf(1))
 	return 0.4 * c.At(y).Area * y
 }
-
-func (c Parabola) growth(depth float64) growth {
-	return wallGrowth(c.width / math.Sqrt(depth*c.depth) / 4)
-}

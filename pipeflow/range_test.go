@@ -103,8 +103,14 @@ func TestTheVaryingRoughness(t *testing.T) {
 // flow can have more than one depth; the lowest is the normal depth, the one of least energy the critical depth.
 func TestTwoLowsOfOneGroundLine(t *testing.T) {
 	g := must(pipeflow.NewGround([]pipeflow.Point{
-		{Station: 0, Elevation: 4}, {Station: 0, Elevation: 2}, {Station: 50, Elevation: 2}, {Station: 51, Elevation: 0},
-		{Station: 53, Elevation: 0}, {Station: 54, Elevation: 2}, {Station: 104, Elevation: 2}, {Station: 104, Elevation: 4},
+		{Station: 0, Elevation: 4},
+		{Station: 0, Elevation: 2},
+		{Station: 50, Elevation: 2},
+		{Station: 51, Elevation: 0},
+		{Station: 53, Elevation: 0},
+		{Station: 54, Elevation: 2},
+		{Station: 104, Elevation: 2},
+		{Station: 104, Elevation: 4},
 	}))
 	m := pipeflow.Manning{Factor: 1, N: 0.03, Slope: 0.002}
 	bank := m.Flow(g, 1.999999)

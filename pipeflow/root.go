@@ -2,35 +2,31 @@ package pipeflow
 
 import "math"
 
-// A hydraulic function is the logarithm of what a section offers at a depth over what is asked for: it passes zero at the
-// depth that is sought. Given with it is its slope in the logarithm of depth, y df/dy. In these terms the functions of
-// most sections are nearly straight lines, so that depths of any size come out to the same relative accuracy.
-type hydraulic func(depth float64) (value, slope float64)
-
 const (
-	// lastStep ends Newton's iteration: the error left after a step in ln y is about its square, here 1e-15.
-	lastStep = 3e-8
+	// lastStep ends the third-order iteration: the error left after a step in ln y is about its cube, and a thousand times
+	// that close to the largest discharge, here 1e-14.
+	lastStep = 2e-6
 	// depthTolerance is the relative accuracy asked of the bracketed search, a few hundred times the spacing of
 	// floating-point numbers, so that rounding in the section's geometry cannot stop it short.
 	depthTolerance = 1e-13
-	// newtonSteps bounds Newton's iteration, which from a usual start needs four; what it cannot do the bracketed search
-	// finishes.
-	newtonSteps = 25
+	// freeSteps bounds the third-order iteration, which from a usual start needs two or three; what it cannot do the
+	// bracketed search finishes.
+	freeSteps = 20
 )
 
 // solveDepth is a depth in (0, high) at which f passes zero going up, from a start between. Given that f is below zero
-// at small depths and not below it at high (+Inf for walls without end) there is one. Newton's steps are taken in
+// at small depths and not below it at high (+Inf for walls without end) there is one. Third-order steps are taken in
 //
 //	z = ln y - ln(1 - y/limit)
 //
-// with the limit +Inf, or the rise where the function is singular under a crown. A step that leaves the bracket is
-// replaced by halving it.
+// with the limit +Inf, or the rise where the function is singular under a crown. With r = 1 - y/limit, derivatives in z
+// are f_z = r f', f_zz = r² f” - r (1 - r) f'. A step that leaves the bracket is replaced by halving it.
 //
 // No answer: f has no zero in the range of floating-point numbers.
 func solveDepth(start, high, limit float64, f hydraulic) (depth float64, ok bool) {
 	low, y := 0.0, start
-	for range newtonSteps {
-		value, slope := f(y)
+	for range freeSteps {
+		value, slope, bend := f(y)
 		if value == 0 {
 			return y, true
 		}
@@ -40,7 +36,7 @@ func solveDepth(start, high, limit float64, f hydraulic) (depth float64, ok bool
 			high = y
 		}
 		room := 1 - y/limit
-		step := -value / (slope * room)
+		step := thirdOrder(value, room*slope, room*(room*bend-(1-room)*slope))
 		odds := y / room * exp(step)
 		next := odds / (1 + odds/limit)
 		if math.Abs(step) < lastStep {
@@ -54,7 +50,15 @@ func solveDepth(start, high, limit float64, f hydraulic) (depth float64, ok bool
 		}
 		y = next
 	}
-	return bracketDepth(low, high, f)
+	return bracketDepth(low, high, valueOf(f))
+}
+
+// valueOf is the value of a hydraulic function alone.
+func valueOf(f hydraulic) func(depth float64) float64 {
+	return func(y float64) float64 {
+		v, _, _ := f(y)
+		return v
+	}
 }
 
 // between halves a bracket in ln y; from an open end it goes outward by a factor.
@@ -69,12 +73,9 @@ func between(low, high float64) float64 {
 	return math.Sqrt(low) * math.Sqrt(high)
 }
 
-// bracketDepth finds the zero of f between low and high without its slope, after closing the ends that are still open.
-func bracketDepth(low, high float64, f hydraulic) (depth float64, ok bool) {
-	atZ := func(z float64) float64 {
-		value, _ := f(math.Exp(z))
-		return value
-	}
+// bracketDepth finds the zero of f between low and high by its values alone, after closing the ends that are still open.
+func bracketDepth(low, high float64, f func(depth float64) float64) (depth float64, ok bool) {
+	atZ := func(z float64) float64 { return f(math.Exp(z)) }
 	for range 400 { // 64^400 spans all floating-point numbers
 		if low > 0 && !math.IsInf(high, 1) {
 			a, b := math.Log(low), math.Log(high)
@@ -84,7 +85,7 @@ func bracketDepth(low, high float64, f hydraulic) (depth float64, ok bool) {
 		if y == 0 || math.IsInf(y, 1) {
 			break
 		}
-		if value, _ := f(y); value < 0 {
+		if f(y) < 0 {
 			low = y
 		} else {
 			high = y

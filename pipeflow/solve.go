@@ -76,22 +76,21 @@ func (m Manning) LengthFor(flow, least, most float64, of func(length float64) (s
 	if !(flow > 0) || math.IsInf(flow, 1) || !(m.Slope > 0) || !(least >= 0) || !(most > least) {
 		return 0, false
 	}
-	f := func(length float64) (value, slope float64) {
+	f := func(length float64) float64 {
 		s, depth, err := of(length)
 		if err != nil {
-			return math.NaN(), math.NaN()
+			return math.NaN()
 		}
-		return math.Log(m.Flow(s, depth) / flow), 0
+		return math.Log(m.Flow(s, depth) / flow)
 	}
-	if value, _ := f(least); least > 0 && !(value <= 0) {
+	if least > 0 && !(f(least) <= 0) {
 		return 0, false
 	}
-	if value, _ := f(most); !math.IsInf(most, 1) && !(value >= 0) {
+	if !math.IsInf(most, 1) && !(f(most) >= 0) {
 		return 0, false
 	}
 	length, ok = bracketDepth(least, most, f)
-	value, _ := f(length)
-	return length, ok && math.Abs(value) < reached
+	return length, ok && math.Abs(f(length)) < reached
 }
 
 // reached is how near to the flow asked for a solution must come; farther off it is a jump over the flow.

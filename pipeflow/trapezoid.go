@@ -69,5 +69,3 @@ func (c Trapezoid) Moment(depth float64) float64 {
 func (c Trapezoid) walls() float64 {
 	return math.Sqrt(1+c.left*c.left) + math.Sqrt(1+c.right*c.right)
 }
-
-func (c Trapezoid) growth(float64) growth { return growth{c.walls(), c.left + c.right} }

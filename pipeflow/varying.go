@@ -44,7 +44,7 @@ func (v Varying) NormalDepths(s Section, flow float64) []float64 {
 	if !(v.Slope > 0) || !(flow > 0) || math.IsInf(flow, 1) {
 		return nil
 	}
-	f := func(y float64) (value, slope float64) { return math.Log(v.Flow(s, y) / flow), 0 }
+	f := func(y float64) float64 { return math.Log(v.Flow(s, y) / flow) }
 	most := v.deepest(s, flow)
 	var depths []float64
 	low, atLow := 0.0, math.Inf(-1)
@@ -53,7 +53,7 @@ func (v Varying) NormalDepths(s Section, flow float64) []float64 {
 		if i == scanParts && flatRoofed(s) {
 			y *= underRoof
 		}
-		value, _ := f(y)
+		value := f(y)
 		switch {
 		case value == 0:
 			depths = append(depths, y)
@@ -68,14 +68,11 @@ func (v Varying) NormalDepths(s Section, flow float64) []float64 {
 }
 
 // crossing is the zero of f between two depths where it passes upward or downward.
-func crossing(low, high float64, upward bool, f hydraulic) (depth float64, ok bool) {
+func crossing(low, high float64, upward bool, f func(float64) float64) (depth float64, ok bool) {
 	if upward {
 		return bracketDepth(low, high, f)
 	}
-	return bracketDepth(low, high, func(y float64) (value, slope float64) {
-		value, slope = f(y)
-		return -value, -slope
-	})
+	return bracketDepth(low, high, func(y float64) float64 { return -f(y) })
 }
 
 // deepest is the rise, or for walls without end a depth that carries more than the flow.
