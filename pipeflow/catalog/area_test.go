@@ -5,8 +5,8 @@ import (
 	"testing"
 )
 
-// Areas in ft² as the standards' tables print them, from memory of ASTM C506 and C1577 and of AASHTO M36 handbooks. They were
-// not used to make the rows: the rows hold span, rise, radii and haunches, and the area follows.
+// Areas in ft² as the standards' tables print them, from memory of ASTM C506 and C1577 and of AASHTO M36 handbooks.
+// They were not used to make the rows: the rows hold span, rise, radii and haunches, and the area follows.
 func TestAreasComeOutAsTheTablesPrintThem(t *testing.T) {
 	cases := []struct {
 		shape      Shape

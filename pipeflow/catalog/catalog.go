@@ -84,8 +84,8 @@ func (c Catalog) Sizes(units string, shape Shape) []Size {
 func (c Catalog) Default(units string) []Size { return c.ForMaterial(units, "", Circle) }
 
 // ForMaterial lists the sizes of a shape from which a pipe of a material is chosen, ascending by rise, then span: its
-// first series, which is the user's own where there is one. A blank material is concrete. The list is empty where the material is
-// made to order or not in that shape.
+// first series, which is the user's own where there is one. A blank material is concrete. The list is empty where the
+// material is made to order or not in that shape.
 func (c Catalog) ForMaterial(units, material string, shape Shape) []Size {
 	name, ok := sizesOf(material)
 	if !ok {
@@ -127,8 +127,8 @@ func (c Catalog) Find(units, material string, shape Shape, span, rise float64) (
 // same is the relative difference within which two dimensions are one: far above rounding, far below any step of sizes.
 const same = 1e-6
 
-// Wall is the thickness above the crown of that size, inches or millimetres. There is no answer where the size is not listed
-// for the material or has no wall.
+// Wall is the thickness above the crown of that size, inches or millimetres. There is no answer where the size is not
+// listed for the material or has no wall.
 func (c Catalog) Wall(units, material string, shape Shape, span, rise float64) (thickness float64, ok bool) {
 	s, ok := c.Find(units, material, shape, span, rise)
 	if !ok || !s.HasWall {
@@ -137,8 +137,8 @@ func (c Catalog) Wall(units, material string, shape Shape, span, rise float64) (
 	return s.Wall, true
 }
 
-// Nearest is the listed size of a material's first series whose span and rise are least off by their ratios: what to offer
-// for a size that is not listed. There is none where the material is not made in that shape.
+// Nearest is the listed size of a material's first series whose span and rise are least off by their ratios: what to
+// offer for a size that is not listed. There is none where the material is not made in that shape.
 func (c Catalog) Nearest(units, material string, shape Shape, span, rise float64) (Size, bool) {
 	rows := c.ForMaterial(units, material, shape)
 	if len(rows) == 0 || !(span > 0) || !(rise > 0) {

@@ -22,6 +22,6 @@
 //
 // # A user's own list
 //
-// [Parse] reads a list with the same columns and [Catalog.With] lays it over the standard one: a series of the same name is
-// replaced, a new series is put first, so that sizes are chosen from it.
+// [Parse] reads a list with the same columns and [Catalog.With] lays it over the standard one: a series of the same
+// name is replaced, a new series is put first, so that sizes are chosen from it.
 package catalog

@@ -8,10 +8,10 @@ import (
 	"strings"
 )
 
-// Parse reads a list of sizes: a heading row with at least shape and span, and a row a size. A blank rise of a circle is its
-// span; blank units are the ones given (pass "" to make the column required); a blank material is concrete, which a pipe
-// without material takes too; a blank series is "own sizes". All faults of all rows are collected, in the order
-// of the text; rows with a fault are left out.
+// Parse reads a list of sizes: a heading row with at least shape and span, and a row a size. A blank rise of a circle
+// is its span; blank units are the ones given (pass "" to make the column required); a blank material is concrete,
+// which a pipe without material takes too; a blank series is "own sizes". All faults of all rows are collected, in
+// the order of the text; rows with a fault are left out.
 func Parse(r io.Reader, units string) ([]Size, []Fault) {
 	t, faults := readTable(r)
 	if len(t.headings) == 0 {

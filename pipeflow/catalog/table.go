@@ -37,8 +37,9 @@ type table struct {
 	decimal  byte // the character that may stand for the decimal point beside '.': ',' where the separator is another
 }
 
-// readTable cuts a text into cells. The separator is a tab, a semicolon or a comma, whichever the heading row has, in that
-// order; a '#' starts a comment line; a byte-order mark and CRLF are taken. A text that is not CSV is cut up to its fault.
+// readTable cuts a text into cells. The separator is a tab, a semicolon or a comma, whichever the heading row has, in
+// that order; a '#' starts a comment line; a byte-order mark and CRLF are taken. A text that is not CSV is cut up to
+// its fault.
 func readTable(r io.Reader) (table, []Fault) {
 	raw, err := io.ReadAll(r)
 	if err != nil {

@@ -19,20 +19,21 @@ type curve struct {
 }
 
 // lay measures the path until it covers a distance or comes to its end. A panel over which the series does not die away
-// is laid again half as wide. The last one is laid again over the part that is used, until that is most of it: so its
-// error is a share of the distance asked for and not of a panel that may be a thousand times as long.
+// is laid again narrower. The last one is laid again over the part that is used, until that is most of it: so its error
+// is a share of the distance asked for and not of a panel that may be a thousand times as long. At the bound on
+// panels or trials, which a million fuzzed pipes have not met, one panel takes the rest as it is.
 func (c *curve) lay(w *water, p path, sign, distance float64) {
 	c.path, c.count, c.reach = p, 0, 0
 	c.start, _ = p.at(0)
 	at, width := 0.0, min(1, p.end)
-	for range maxTrials {
-		if at >= p.end || c.count == maxPanels {
-			return
+	for trial := 1; at < p.end && c.count < maxPanels; trial++ {
+		last := c.count == maxPanels-1 || trial >= maxTrials
+		if width = min(width, p.end-at); last && !math.IsInf(p.end, 1) {
+			width = p.end - at
 		}
-		width = min(width, p.end-at)
 		m := w.measure(&p, sign, at, width)
 		narrower, reached := c.narrower(&m, distance)
-		if narrower < 1 && width > narrowest && c.count < maxPanels-1 {
+		if narrower < 1 && width > narrowest && !last {
 			width *= narrower
 			continue
 		}
@@ -48,8 +49,8 @@ func (c *curve) lay(w *water, p path, sign, distance float64) {
 	}
 }
 
-// narrower is the share of its width to which a panel is to be cut, 1 where it stands; reached tells whether it takes the curve
-// over the distance asked for.
+// narrower is the share of its width to which a panel is to be cut, 1 where it stands; reached tells whether it takes
+// the curve over the distance asked for.
 func (c *curve) narrower(m *panel, distance float64) (share float64, reached bool) {
 	if rough := m.roughness(); !(rough <= smooth) {
 		return min(0.7, fitting(rough)), false

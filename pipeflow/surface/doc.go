@@ -10,16 +10,16 @@
 //	the jump                M above it = M below it              Chow 1959, section 15-1
 //	full stretch            the pressure line rises upstream by Sf a unit of length
 //
-// In a full stretch the specific force is Q²/(gA) + A (h - (rise - ȳ)), h the height of the pressure line over the invert and
-// ȳ the depth of the centroid below the crown: the same law with the water standing at h.
+// In a full stretch the specific force is Q²/(gA) + A (h - (rise - ȳ)), h the height of the pressure line over the
+// invert and ȳ the depth of the centroid below the crown: the same law with the water standing at h.
 //
 // # Method
 //
-// Distance is found by depth, dx = (1 - Fr²)/(S0 - Sf) dy, panel by panel with the seven-point Gauss–Kronrod rule. The
-// depth is not the variable of integration: √(rise - y) is, because the width of a closed section goes to zero with that root
-// at the crown, and, where the surface tends to normal depth, the logarithm of what is left to it, because there the distance
-// grows like that logarithm. The seven values of a panel also give the depth at any place in it, by a series of
-// Legendre polynomials, so neither the far end nor the jump costs further sections.
+// Distance is found by depth, dx = (1 - Fr²)/(S0 - Sf) dy, panel by panel with the seven-point Gauss–Kronrod rule.
+// The depth is not the variable of integration: √(rise - y) is, because the width of a closed section goes to zero
+// with that root at the crown, and, where the surface tends to normal depth, the logarithm of what is left to it,
+// because there the distance grows like that logarithm. The seven values of a panel also give the depth at any place
+// in it, by a series of Legendre polynomials, so neither the far end nor the jump costs further sections.
 //
 // # Regimes
 //

@@ -15,8 +15,8 @@ const (
 	Uniform    Curve = "uniform"
 )
 
-// tranquilCurve names the free surface that begins at a depth and goes up the pipe. Above the upper of two normal depths the surface
-// is drawn down as on a mild slope, whatever the slope.
+// tranquilCurve names the free surface that begins at a depth and goes up the pipe. Above the upper of two normal
+// depths the surface is drawn down as on a mild slope, whatever the slope.
 func (w *water) tranquilCurve(d Depths, steep bool, start float64) Curve {
 	drawn := !d.HasNormal || start < d.Normal || start < w.rise && w.rises(start)
 	switch {

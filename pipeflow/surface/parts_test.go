@@ -75,8 +75,8 @@ func TestSolvingDoesNotAllocate(t *testing.T) {
 	}
 }
 
-// At the slope on which a flow runs uniformly at critical depth, found to the last digits, the surface below a pool is C1 and
-// keeps normal depth above it; a hair steeper or flatter the depths hardly change.
+// At the slope on which a flow runs uniformly at critical depth, found to the last digits, the surface below a pool
+// is C1 and keeps normal depth above it; a hair steeper or flatter the depths hardly change.
 func TestACriticalSlopeIsTakenAsMild(t *testing.T) {
 	pipe := metric(0)
 	critical, _ := pipeflow.CriticalDepth(pipe.Section, pipe.Gravity, 1)
@@ -109,8 +109,8 @@ func TestACriticalSlopeIsTakenAsMild(t *testing.T) {
 	}
 }
 
-// Where a flow is a little over the largest, the surface squeezes past the depth that carries most, over a long way: the distance there
-// grows like 1/√excess. It is held against a sum of 20,000 steps.
+// Where a flow is a little over the largest, the surface squeezes past the depth that carries most, over a long way:
+// the distance there grows like 1/√excess. It is held against a sum of 20,000 steps.
 func TestAFlowALittleOverTheLargestIsFollowed(t *testing.T) {
 	pipe := metric(0.001)
 	pipe.Length = 1e5

@@ -2,8 +2,8 @@ package surface
 
 import "math"
 
-// path is the way of the depth along a surface as a function of a parameter u from 0 up. Its coordinate z is √(rise - y), in
-// which the width of a closed section is smooth up to the crown, or the depth itself.
+// path is the way of the depth along a surface as a function of a parameter u from 0 up. Its coordinate z is √(rise -
+// y), in which the width of a closed section is smooth up to the crown, or the depth itself.
 type path struct {
 	rise   float64
 	rooted bool // z = √(rise - y), else z = y

@@ -17,8 +17,8 @@ type Pipe struct {
 
 // Control is what holds the water at the two ends.
 type Control struct {
-	// Level is the height of the water below the pipe over its lower invert: over the rise where the outlet is drowned, at
-	// or below 0 where it falls away.
+	// Level is the height of the water below the pipe over its lower invert: over the rise where the outlet is
+	// drowned, at or below 0 where it falls away.
 	Level float64
 	// Upper is the depth of a stream that enters at the upper end faster than critical, from a gate for one. 0, or a
 	// depth that is not below critical, leaves the upper end to the pipe.

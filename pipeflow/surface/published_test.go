@@ -9,9 +9,9 @@ import (
 	"rimfall/pipeflow"
 )
 
-// A 10 ft sewer, slope 0.0005, n 0.012, 400 cfs, free outfall, k = 1.486, g = 32.2: a direct-step solution of 20,000 steps
-// (recomputed for this project) has the depths 6, 7 and 8 ft at 497.8, 2,523 and 14,059 ft from the outfall; critical
-// depth 4.748 ft, normal depth 8.18 ft.
+// A 10 ft sewer, slope 0.0005, n 0.012, 400 cfs, free outfall, k = 1.486, g = 32.2: a direct-step solution of 20,000
+// steps (recomputed for this project) has the depths 6, 7 and 8 ft at 497.8, 2,523 and 14,059 ft from the outfall;
+// critical depth 4.748 ft, normal depth 8.18 ft.
 func ExampleProfile_Solve() {
 	circle, _ := pipeflow.NewCircle(10)
 	sewer := Pipe{
@@ -53,10 +53,11 @@ func TestTheSewerWithAnotherGravity(t *testing.T) {
 	}
 }
 
-// Texas Tech University, CE 3372 Water Systems Design, exercise set 18 with solution, 2017: a rectangular concrete channel 16 ft
-// wide, slope 0.0035, 192 cfs, with a weir that holds 4.648 ft. Printed: normal depth 1.509 ft, critical depth 1.648 ft,
-// 768 ft to a depth of 1.66 ft. n is not printed; 0.01296 follows from the normal depth. The source steps in 0.1 ft of
-// depth; done over by its own method that is 769.4 ft, so its own error is 0.2 %. Exactly it is 767.6 ft.
+// Texas Tech University, CE 3372 Water Systems Design, exercise set 18 with solution, 2017: a rectangular concrete
+// channel 16 ft wide, slope 0.0035, 192 cfs, with a weir that holds 4.648 ft. Printed: normal depth 1.509 ft,
+// critical depth 1.648 ft, 768 ft to a depth of 1.66 ft. n is not printed; 0.01296 follows from the normal depth. The
+// source steps in 0.1 ft of depth; done over by its own method that is 769.4 ft, so its own error is 0.2 %. Exactly
+// it is 767.6 ft.
 func TestTheBackwaterOfAWeirInARectangularChannel(t *testing.T) {
 	rectangle, err := pipeflow.NewRectangle(16)
 	if err != nil {

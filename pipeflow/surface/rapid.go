@@ -13,7 +13,7 @@ type rapid struct {
 // lay draws the surface from a depth at the upper end: to normal depth on a steep slope, else up to critical depth.
 func (r *rapid) lay(w *water, d Depths, steep bool, start, length float64) {
 	r.length, r.start, r.bottom = length, start, 0
-	below := d.HasNormal && d.Normal < d.Critical
+	below := d.HasNormal && d.Normal <= d.Critical
 	switch {
 	case below && nearly(start, d.Normal):
 		r.curve.lay(w, w.toNormal(d.Normal, d.Normal), -1, length)
@@ -35,8 +35,8 @@ func (r *rapid) depth(distance float64) float64 {
 }
 
 // jump finds where the specific forces of the two surfaces are the same, between two distances from the lower end at
-// which the tranquil one has more (low) and less (high), beginning with a guess. Newton's method, kept between bounds that close
-// in and halving them where it leaves them; distance to 1e-7 of the pipe.
+// which the tranquil one has more (low) and less (high), beginning with a guess. Newton's method, kept between bounds
+// that close in and halving them where it leaves them; distance to 1e-7 of the pipe.
 func jump(t *tranquil, r *rapid, low, high, guess float64) float64 {
 	tolerance := 1e-7 * r.length
 	for range 100 {

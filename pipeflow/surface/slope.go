@@ -2,8 +2,8 @@ package surface
 
 import "math"
 
-// IsSteep reports whether a flow in one barrel is controlled at the upper end: normal depth lies below critical depth. Where
-// it is not, or there is no normal depth, the water below controls.
+// IsSteep reports whether a flow in one barrel is controlled at the upper end: normal depth lies below critical
+// depth. Where it is not, or there is no normal depth, the water below controls.
 func (p Pipe) IsSteep(flow float64, d Depths) bool {
 	if !(flow > 0) {
 		return false
@@ -18,8 +18,8 @@ func (p Pipe) IsSteep(flow float64, d Depths) bool {
 const sameDepth = 1e-6
 
 // classify puts the rise in place of a critical depth that there is not, and tells whether the slope is steep: normal
-// depth is below critical depth, and at critical depth the flow uses less slope than the pipe has. (Between full-bore capacity
-// and the largest flow both normal depths may lie below critical depth; the pipe then acts as a mild one.)
+// depth is below critical depth, and at critical depth the flow uses less slope than the pipe has. (Between full-bore
+// capacity and the largest flow both normal depths may lie below critical depth; the pipe then acts as a mild one.)
 func (w *water) classify(d Depths) (known Depths, steep bool) {
 	if !d.HasCritical {
 		d.Critical = w.rise

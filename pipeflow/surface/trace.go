@@ -18,8 +18,8 @@ func (p *Profile) Depth(distance float64) float64 {
 	return p.sup.depth(distance)
 }
 
-// AppendPoints adds the surface from the lower end up to a list: both ends, the places between that cut the pipe into equal
-// parts, the places where the surface meets the crown, and at a jump both depths.
+// AppendPoints adds the surface from the lower end up to a list: both ends, the places between that cut the pipe into
+// equal parts, the places where the surface meets the crown, and at a jump both depths.
 func (p *Profile) AppendPoints(points []Point, parts int) []Point {
 	first := len(points)
 	for i := range max(1, parts) + 1 {

@@ -2,8 +2,8 @@ package surface
 
 import "math"
 
-// tranquil is the surface from the lower end up: a stretch under the pressure line of the water below, a free surface, and
-// a full stretch above where that meets the crown. Any of them may be missing.
+// tranquil is the surface from the lower end up: a stretch under the pressure line of the water below, a free
+// surface, and a full stretch above where that meets the crown. Any of them may be missing.
 type tranquil struct {
 	water   water
 	level   float64 // height of the water at the lower end over the invert there
@@ -23,17 +23,20 @@ const (
 	unbounded              // ever greater depths in an open section
 )
 
+// touching is the share of the rise within which a level counts as at the crown: above the rounding of a depth there.
+const touching = 1e-9
+
 // lay draws the surface from a level that is at critical depth or over it. On a steep slope it falls to critical depth,
 // where it ends; on others it tends to normal depth or to the crown.
 func (t *tranquil) lay(d Depths, steep bool, level, length float64) {
 	w := &t.water
 	t.level, t.drowned, t.top = level, 0, math.Inf(1)
 	start := level
-	if w.closed && level >= w.rise {
+	if w.closed && level >= w.rise*(1-touching) {
 		t.drowned = length
 		if w.full < w.slope {
 			// The pressure line comes down on the crown.
-			t.drowned = min(length, (level-w.rise)/(w.slope-w.full))
+			t.drowned = max(0, min(length, (level-w.rise)/(w.slope-w.full)))
 		}
 		start = w.rise
 	}
