@@ -180,3 +180,45 @@ func TestZeroValuesCarryNothing(t *testing.T) {
 		t.Errorf("hydraulic radius of nothing: %v", n)
 	}
 }
+
+func TestTheEdgesOfTheQuestions(t *testing.T) {
+	circle, channel := must(pipeflow.NewCircle(1)), must(pipeflow.NewTrapezoid(2, 1, 1))
+	ground := must(pipeflow.NewGround([]pipeflow.Point{{Elevation: 1}, {Station: 1}, {Station: 2}, {Station: 3, Elevation: 1}}))
+	level := sewer
+	level.Slope = 0
+	largest, crest, _ := sewer.LargestFlow(circle)
+	atLargest, _ := sewer.NormalDepth(circle, largest)
+	first := func(value float64, _ bool) float64 { return value }
+	for _, c := range []struct {
+		name      string
+		got, want float64
+	}{
+		{"flow 0 has depth 0", first(sewer.NormalDepth(circle, 0)), 0},
+		{"velocity 0 has depth 0", sewer.DepthsOfVelocity(circle, 0).Lower, 0},
+		{"flow 0 has critical depth 0", first(pipeflow.CriticalDepth(circle, gravity, 0)), 0},
+		{"the largest discharge runs at its depth", atLargest, crest},
+		{"still water has the energy of its depth", first(pipeflow.SpecificEnergy(circle, gravity, 0.4, 0)), 0.4},
+		{"a pressure head counts in the energy", first(pipeflow.SpecificEnergy(circle, gravity, 3, 0)), 3},
+		{"a pressure head presses on the whole section", first(pipeflow.SpecificForce(circle, gravity, 3, 0)), math.Pi / 4 * 2.5},
+		{"a level pipe has no capacity", level.FullFlow(circle), 0},
+		{"nor has a level channel", level.FullFlow(channel), 0},
+		{"a channel without end has no bound", sewer.FullFlow(channel), math.Inf(1)},
+		{"flow 0 needs no slope", first(sewer.SlopeFor(circle, 0.5, 0)), 0},
+		{"critical flow at its depth has Froude number 1", first(pipeflow.Froude(circle, gravity,
+			first(pipeflow.CriticalDepth(circle, gravity, 0.3)), 0.3)), 1},
+		{"a velocity comes back in a channel", sewer.Velocity(channel, sewer.DepthsOfVelocity(channel, 3).Lower), 3},
+		{"a velocity comes back on a ground line", sewer.Velocity(ground, sewer.DepthsOfVelocity(ground, 1).Lower), 1},
+		{"a ground line is full at its lower end", sewer.FullFlow(ground), sewer.Flow(ground, 1)},
+		{"the flow of its end comes back from a ground line", first(sewer.NormalDepth(ground, sewer.FullFlow(ground))), 1},
+	} {
+		if c.got != c.want && !(math.Abs(c.got-c.want) <= 1e-12*c.want) {
+			t.Errorf("%s: got %v, want %v", c.name, c.got, c.want)
+		}
+	}
+	if both := sewer.NormalDepths(circle, largest); both.Count != 2 || !near(both.Lower, crest, 1e-7) || !near(both.Upper, crest, 1e-7) {
+		t.Errorf("both depths of the largest discharge, at %v, are %+v", crest, both)
+	}
+	if _, ok := sewer.NormalDepth(ground, 1.001*sewer.FullFlow(ground)); ok {
+		t.Error("a ground line carries more than up to its lower end")
+	}
+}

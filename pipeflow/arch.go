@@ -118,10 +118,8 @@ func threeArcs(rise, bottom, top, corner, across, up float64) []piece {
 // Error: a length that is none, a smaller radius over half the smaller dimension, or a larger radius that would have to
 // change by more than a fifth. A larger radius of 0 is found from the others.
 func NewOval(span, rise, crownRadius, sideRadius float64) (oval *Outline, closing float64, err error) {
-	for name, length := range map[string]float64{"span": span, "rise": rise} {
-		if err := checkLength(name, length); err != nil {
-			return nil, 0, err
-		}
+	if _, err := NewBox(span, rise); err != nil {
+		return nil, 0, err
 	}
 	long, short := max(span, rise), min(span, rise)
 	small, given := sideRadius, crownRadius

@@ -36,7 +36,6 @@ func (m Manning) NormalDepths(s Section, flow float64) Depths {
 // falling is the zero of a hydraulic function on its falling branch, from the crest to the round crown, or to just below
 // a flat roof. What is zero at the crown within rounding is the rise itself.
 func falling(s Section, f hydraulic, crest float64) (depth float64, ok bool) {
-	const rounding = 1e-14
 	top := s.Rise()
 	if flatRoofed(s) {
 		top *= underRoof
@@ -44,8 +43,10 @@ func falling(s Section, f hydraulic, crest float64) (depth float64, ok bool) {
 	atCrest, _, _ := f(crest)
 	atTop, _, _ := f(top)
 	switch {
-	case crest >= top || atCrest < 0 || atTop > rounding:
+	case crest >= s.Rise()*underRoof || atCrest < -rounding || atTop > rounding:
 		return 0, false
+	case atCrest <= 0:
+		return crest, true
 	case atTop >= -rounding:
 		return top, true
 	}
@@ -68,8 +69,10 @@ func (m Manning) DepthsOfVelocity(s Section, velocity float64) Depths {
 	if velocity == 0 {
 		return Depths{Count: 1}
 	}
-	factor := velocity / m.strength()
-	f := radiusFunction(s, factor)
+	f := radiusFunction(s, velocity/m.strength())
+	if ground, is := s.(*Ground); is {
+		return ground.leastDepth(f)
+	}
 	high, start := s.Rise(), min(1, s.Rise()/2)
 	if s.Closed() {
 		high = deepestRadius(s)

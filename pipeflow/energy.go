@@ -30,11 +30,13 @@ func AlternateDepth(s Section, g, depth, flow float64) (alternate float64, ok bo
 	if !ok || !(flow > 0) || !(g > 0) {
 		return 0, false
 	}
-	both := DepthsOfEnergy(s, g, energy, flow)
-	critical := criticalOrRise(s, g, flow)
+	return otherSide(depth, criticalOrRise(s, g, flow), DepthsOfEnergy(s, g, energy, flow))
+}
+
+// otherSide picks of two depths the one that lies across critical depth from a depth.
+func otherSide(depth, critical float64, both Depths) (other float64, ok bool) {
 	switch {
-	case both.Count == 0:
-		// Rounding has put the energy under its least: the depth is the critical one.
+	case both.Count == 0: // rounding has put the energy or force under its least: the depth is the critical one
 		return critical, math.Abs(depth-critical) < 1e-6*critical
 	case depth > critical:
 		return both.Lower, true
@@ -61,7 +63,7 @@ func DepthsOfEnergy(s Section, g, energy, flow float64) Depths {
 // depth 0 and rises beyond, above the rise of a closed section without a bend. The upper one is not over most.
 func eachSide(s Section, critical, most float64, surplus func(depth float64) float64) Depths {
 	atCritical := surplus(critical)
-	if atCritical > 0 {
+	if atCritical > 0 || math.IsInf(critical, 1) {
 		return Depths{}
 	}
 	low := critical

@@ -37,16 +37,7 @@ func ConjugateDepth(s Section, g, depth, flow float64) (conjugate float64, ok bo
 	if !ok || !(flow > 0) || !(g > 0) {
 		return 0, false
 	}
-	both := DepthsOfForce(s, g, force, flow)
-	critical := criticalOrRise(s, g, flow)
-	switch {
-	case both.Count == 0:
-		// Rounding has put the force under its least: the depth is the critical one.
-		return critical, math.Abs(depth-critical) < 1e-6*critical
-	case depth > critical:
-		return both.Lower, true
-	}
-	return both.Upper, both.Count == 2
+	return otherSide(depth, criticalOrRise(s, g, flow), DepthsOfForce(s, g, force, flow))
 }
 
 // DepthsOfForce are the rapid and the tranquil depth at which a flow has a specific force: two over the least force, which

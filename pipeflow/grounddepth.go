@@ -10,11 +10,17 @@ const bandParts = 8
 
 // normalDepth is the least depth at which A R^(2/3) reaches the given value.
 func (g *Ground) normalDepth(factor float64) (depth float64, ok bool) {
-	g.crossings(normalFunction(g, factor), func(y float64) bool {
-		depth, ok = y, true
+	found := g.leastDepth(normalFunction(g, factor))
+	return found.Lower, found.Count == 1
+}
+
+// leastDepth is the least depth at which a hydraulic function passes zero upward, if any.
+func (g *Ground) leastDepth(f hydraulic) (found Depths) {
+	g.crossings(f, func(y float64) bool {
+		found = Depths{Count: 1, Lower: y}
 		return false
 	})
-	return depth, ok
+	return found
 }
 
 // criticalDepth is the depth of least specific energy y + Q²/(2gA²) among those where A³/T passes the target Q²/g upward.

@@ -63,8 +63,8 @@ func (c Parabola) growth(depth float64) growth {
 }
 
 // arcGrowth is that of a circle at heights below and above the water line. With x = √(below above), half the width, and
-// c = (above - below)/2 the height of the centre over the line, x' = c/x and x” = -(D/2)²/x³; the wall is (D/2)/x long
-// for a unit of height.
+// c = (above - below)/2 the height of the centre over the line, dx/dy = c/x and d²x/dy² = -(D/2)²/x³; the wall is
+// (D/2)/x long for a unit of height.
 func arcGrowth(D, below, above float64) growth {
 	x := math.Sqrt(below * max(above, 0))
 	centre := (above - below) / 2
@@ -76,7 +76,7 @@ func arcGrowth(D, below, above float64) growth {
 	}
 }
 
-// wallGrowth is that of two like walls that lean outward by x' for a unit of height, given x' and x”.
+// wallGrowth is that of two like walls that lean outward, given dx/dy and d²x/dy² of one of them.
 func wallGrowth(lean, bend float64) growth {
 	length := math.Sqrt(1 + lean*lean)
 	return growth{perimeter: 2 * length, perimeterBend: 2 * lean / length * bend, width: 2 * lean, widthBend: 2 * bend}

@@ -5,11 +5,11 @@ package pipeflow
 // functions of most sections are nearly straight lines, so that few steps are needed and depths of any size come out to
 // the same relative accuracy.
 //
-// The functions below are made of elasticities, such as a = y A'/A of the area, A' being the top width; one of them
-// changes with ln y by a + y² A”/A - a².
+// The functions below are made of elasticities, such as a = y T/A of the area, whose growth is the top width T; it changes
+// with ln y by a + (y²/A) dT/dy - a².
 type hydraulic func(depth float64) (value, slope, bend float64)
 
-// elasticity is y F'/F and its derivative in ln y, of a quantity F from its first two derivatives in y.
+// elasticity is (y/F) dF/dy and its derivative in ln y, of a quantity F from its first two derivatives in y.
 func elasticity(y, f, first, second float64) (value, bend float64) {
 	value = y * first / f
 	return value, value + y*(y*second/f) - value*value

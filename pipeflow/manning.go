@@ -14,26 +14,42 @@ type Manning struct {
 // Flow is the uniform flow at a depth: 0 at depth 0, and 0 where the slope is not over 0. At the rise of a closed
 // section it is the full-bore capacity.
 func (m Manning) Flow(s Section, depth float64) float64 {
+	if !(m.Slope > 0) {
+		return 0
+	}
 	return m.strength() * sectionFactor(s.At(depth))
 }
 
 // Velocity is the mean velocity of the uniform flow at a depth, 0 at depth 0.
 func (m Manning) Velocity(s Section, depth float64) float64 {
+	if !(m.Slope > 0) {
+		return 0
+	}
 	return m.strength() * radiusFactor(s.At(depth))
 }
 
 // FullFlow is the capacity of a closed section running full without pressure, its full-bore capacity; 0 where the slope
-// is not over 0. An open section is taken at its described rise, so one without end has no bound: +Inf.
-func (m Manning) FullFlow(s Section) float64 { return m.Flow(s, s.Rise()) }
-
-// FullVelocity is the velocity at full-bore capacity; 0 where the slope is not over 0.
-func (m Manning) FullVelocity(s Section) float64 { return m.Velocity(s, s.Rise()) }
-
-// strength is (k/n) √S, what Manning's equation holds besides the section; 0 where the slope is not over 0.
-func (m Manning) strength() float64 {
-	if !(m.Slope > 0) {
-		return 0
+// is not over 0. An open section is taken at its described rise; without end it is +Inf.
+func (m Manning) FullFlow(s Section) float64 {
+	rise := s.Rise()
+	if m.Slope > 0 && math.IsInf(rise, 1) {
+		return rise
 	}
+	return m.Flow(s, rise)
+}
+
+// FullVelocity is the velocity at full-bore capacity; 0 where the slope is not over 0. An open section is as for
+// [Manning.FullFlow].
+func (m Manning) FullVelocity(s Section) float64 {
+	rise := s.Rise()
+	if m.Slope > 0 && math.IsInf(rise, 1) {
+		return rise
+	}
+	return m.Velocity(s, rise)
+}
+
+// strength is (k/n) √S, what Manning's equation holds besides the section.
+func (m Manning) strength() float64 {
 	return m.Factor / m.N * math.Sqrt(m.Slope)
 }
 

@@ -28,6 +28,9 @@ type normalSolver interface {
 	normalDepth(factor float64) (depth float64, ok bool)
 }
 
+// rounding is how far two equal quantities that were computed in different ways may be apart.
+const rounding = 1e-14
+
 // depthOfFactor is the least depth at which A R^(2/3) has the given value over 0.
 func depthOfFactor(s Section, factor float64) (depth float64, ok bool) {
 	if fast, is := s.(normalSolver); is {
@@ -43,7 +46,7 @@ func depthOfFactor(s Section, factor float64) (depth float64, ok bool) {
 		most = sectionFactor(s.At(high))
 	}
 	if factor >= most {
-		return high, factor == most && !flatRoofed(s)
+		return high, factor <= most*(1+rounding) && high < s.Rise()*underRoof
 	}
 	start := normalStart(s, factor)
 	if !(start < high) {

@@ -20,7 +20,8 @@ const (
 //	z = ln y - ln(1 - y/limit)
 //
 // with the limit +Inf, or the rise where the function is singular under a crown. With r = 1 - y/limit, derivatives in z
-// are f_z = r f', f_zz = r² f” - r (1 - r) f'. A step that leaves the bracket is replaced by halving it.
+// are f_z = r f_1 and f_zz = r² f_2 - r (1 - r) f_1, with f_1 and f_2 those in ln y. A step that leaves the bracket is
+// replaced by halving it.
 //
 // No answer: f has no zero in the range of floating-point numbers.
 func solveDepth(start, high, limit float64, f hydraulic) (depth float64, ok bool) {
