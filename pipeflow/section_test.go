@@ -88,3 +88,31 @@ func TestEverySection(t *testing.T) {
 		t.Run(name, func(t *testing.T) { sectiontest.Run(t, shape) })
 	}
 }
+
+// TestShapesThatCoincide: the same inside made in two ways has the same geometry and the same depths.
+func TestShapesThatCoincide(t *testing.T) {
+	bank := []pipeflow.Point{
+		{Station: 0, Elevation: 14}, {Station: 8, Elevation: 10}, {Station: 11, Elevation: 10}, {Station: 19, Elevation: 14},
+	}
+	for name, pair := range map[string][2]pipeflow.Section{
+		"an ellipse of equal axes is a circle": {must(pipeflow.NewEllipse(1.5, 1.5)), must(pipeflow.NewCircle(1.5))},
+		"a haunch of 0 leaves a box":           {must(pipeflow.NewHaunchedBox(3, 2, 0)), must(pipeflow.NewBox(3, 2))},
+		"a channel below a roof is a box":      {must(pipeflow.NewBox(3, 2)), must(pipeflow.NewRectangle(3))},
+		"a triangle has no bottom":             {must(pipeflow.NewTriangle(1, 2)), must(pipeflow.NewTrapezoid(0, 2, 1))},
+		"a surveyed trapezoid is a trapezoid":  {must(pipeflow.NewGround(bank)), must(pipeflow.NewTrapezoid(3, 2, 2))},
+	} {
+		for _, y := range []float64{1e-6, 0.01, 0.3, 0.7, 1.3, 1.49} {
+			a, b := pair[0].At(y), pair[1].At(y)
+			flow := sewer.Flow(pair[0], y)
+			normal, _ := sewer.NormalDepth(pair[1], flow)
+			lower, _ := sewer.NormalDepth(pair[0], flow)
+			critical, _ := pipeflow.CriticalDepth(pair[0], gravity, flow)
+			other, _ := pipeflow.CriticalDepth(pair[1], gravity, flow)
+			if !near(a.Area, b.Area, 1e-14) || !near(a.Perimeter, b.Perimeter, 1e-14) || !near(a.TopWidth, b.TopWidth, 1e-14) ||
+				!near(pair[0].Moment(y), pair[1].Moment(y), 1e-14) || !near(lower, normal, 1e-11) || !near(critical, other, 1e-12) {
+				t.Errorf("%s: depth %v: %+v and %+v, normal depths %v, %v, critical depths %v, %v",
+					name, y, a, b, lower, normal, critical, other)
+			}
+		}
+	}
+}

@@ -4,7 +4,7 @@
 #
 # Method. No closed form of the package is used. The right-hand wall is a function x(z) of height, made from the bare
 # description of the shape (for arcs: centres and radii from the tangency conditions, solved together by Newton's method
-# in 40 digits). Area, perimeter and first moment are integrals over x(z) by tanh-sinh quadrature (mpmath.quad, 30 digits);
+# in 30 digits). Area, perimeter and first moment are integrals over x(z) by tanh-sinh quadrature (mpmath.quad, 30 digits);
 # depths are roots by scipy.optimize.brentq (xtol 1e-15, rtol 4 eps) of those integrals in double precision.
 import sys
 
