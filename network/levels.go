@@ -34,11 +34,12 @@ func (p *Pipe) Invert(e End) Maybe {
 
 // Cover is the height of the rim over the outside of a pipe at one end: its
 // crown and its wall, an unknown wall counting nothing. There is none where the
-// invert or the rim is not known, nor at an outfall.
+// invert or the rim is not known. At an outfall, where the pipe comes to light,
+// it is a number and is not judged.
 func (n *Network) Cover(p *Pipe, e End) Maybe {
 	s := &n.Structures[p.StructureAt(e)]
 	invert := p.Invert(e)
-	if !invert.OK || !s.Rim.OK || s.Kind == Outfall || p.Section == nil {
+	if !invert.OK || !s.Rim.OK || p.Section == nil {
 		return Maybe{}
 	}
 	return Some(s.Rim.V - (invert.V + p.Section.Rise() + p.Wall))

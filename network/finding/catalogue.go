@@ -56,16 +56,10 @@ var rules = []Rule{
 		Error, "max_velocity", "10 to 25 ft/s by agency: Adams County IN, Shepherdsville KY ch. 154",
 	},
 	{
-		"cover", "too little cover",
-		"less than the least height lies between the rim and the outside of the pipe",
-		"wheels break shallow pipes, and other services have no room above them",
-		Error, "min_cover", "1 to 3 ft by agency: Missouri DOT EPG 750.4; Lawrenceburg IN code 155.036",
-	},
-	{
-		"deep-cover", "deeper than allowed",
-		"more than the greatest height lies between the rim and the outside of the pipe",
-		"deep trenches are costly and dangerous, and the pipe needs a higher class",
-		Error, "max_cover", common,
+		"cover", "too little or too much cover",
+		"the height between the rim and the outside of the pipe, at an end that is no outfall, is under the least or over the greatest",
+		"wheels break shallow pipes and other services have no room above them; deep trenches are costly and dangerous and need a stronger pipe",
+		Error, "min_cover, max_cover", "least 1 to 3 ft by agency: Missouri DOT EPG 750.4; Lawrenceburg IN code 155.036",
 	},
 	{
 		"min-size", "smaller than the least size",

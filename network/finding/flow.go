@@ -42,7 +42,7 @@ func (j *judge) noSizeCarries() {
 func (j *judge) cleansingVelocity() {
 	limit := j.Criteria.MinVelocity
 	j.eachPipe(func(p *network.Pipe, run *sweep.Pipe) {
-		velocity, ok, what := run.Velocity, run.State != sweep.Dry, "velocity at design flow"
+		velocity, ok, what := run.Velocity, run.HasCapacity && run.State != sweep.Dry, "velocity at design flow"
 		if j.Criteria.VelocityBasis == network.FullBore {
 			velocity, ok, what = run.Capacity/p.FullArea(), run.HasCapacity, "velocity flowing full"
 		}

@@ -29,39 +29,21 @@ func (j *judge) slope() {
 	})
 }
 
-// eachCover calls a rule for every pipe end that has a cover.
-func (j *judge) eachCover(rule func(p *network.Pipe, e network.End, cover float64)) {
+// cover holds both ends against the least and the greatest cover; an end at an
+// outfall is not judged.
+func (j *judge) cover() {
+	least, greatest := j.Criteria.MinCover, j.Criteria.MaxCover
 	j.eachPipe(func(p *network.Pipe, run *sweep.Pipe) {
 		for _, e := range []network.End{network.Upper, network.Lower} {
-			if c := j.Network.Cover(p, e); c.OK {
-				rule(p, e, c.V)
+			s := &j.Network.Structures[p.StructureAt(e)]
+			c := j.Network.Cover(p, e)
+			switch {
+			case !c.OK || s.Kind == network.Outfall:
+			case least.OK && c.V < least.V-levelRoom:
+				j.add("cover", p.ID, c, least, "cover at the %s end, structure %s, is %s, under %s", e, s.ID, j.length(c.V), j.length(least.V))
+			case greatest.OK && c.V > greatest.V+levelRoom:
+				j.add("cover", p.ID, c, greatest, "cover at the %s end, structure %s, is %s, over %s", e, s.ID, j.length(c.V), j.length(greatest.V))
 			}
-		}
-	})
-}
-
-func (j *judge) cover() {
-	limit := j.Criteria.MinCover
-	if !limit.OK {
-		return
-	}
-	j.eachCover(func(p *network.Pipe, e network.End, cover float64) {
-		if cover < limit.V-levelRoom {
-			j.add("cover", p.ID, network.Some(cover), limit, "cover at the %s end, structure %s, is %s, under %s",
-				e, j.id(p.StructureAt(e)), j.length(cover), j.length(limit.V))
-		}
-	})
-}
-
-func (j *judge) deepCover() {
-	limit := j.Criteria.MaxCover
-	if !limit.OK {
-		return
-	}
-	j.eachCover(func(p *network.Pipe, e network.End, cover float64) {
-		if cover > limit.V+levelRoom {
-			j.add("deep-cover", p.ID, network.Some(cover), limit, "cover at the %s end, structure %s, is %s, over %s",
-				e, j.id(p.StructureAt(e)), j.length(cover), j.length(limit.V))
 		}
 	})
 }

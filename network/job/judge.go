@@ -38,7 +38,7 @@ func (r *reader) dropLoose() (whole bool) {
 	n := r.network
 	pipes, areas := n.Pipes[:0], n.Areas[:0]
 	for _, p := range n.Pipes {
-		if p.From >= 0 && p.To >= 0 {
+		if p.From >= 0 && p.To >= 0 && p.From != p.To {
 			pipes = append(pipes, p)
 		}
 	}

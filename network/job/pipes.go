@@ -51,6 +51,9 @@ func (r *reader) readPipes(t *table) {
 		p.ID = seen.add(t, row.ID, len(n.Pipes))
 		p.From = r.structure(t, "from", row.From)
 		p.To = r.structure(t, "to", row.To)
+		if from := strings.TrimSpace(row.From); from != "" && from == strings.TrimSpace(row.To) {
+			t.faultAt("to", "pipe %s starts and ends at structure %s", p.ID, from)
+		}
 		p.Length = r.length(t, row, &p)
 		p.Count = r.barrels(t, row.Count)
 		p.Shape = shapeWords[t.word("shape", row.Shape, shapeWords)]

@@ -23,6 +23,7 @@ var tableFields = map[string][]string{
 	"areas":      csvFields[areaRow](),
 	"departures": csvFields[departureRow](),
 	"surfaces":   csvFields[surfaceRow](),
+	"rainfall":   {"duration"},
 }
 
 func csvFields[R any]() []string {
@@ -115,43 +116,55 @@ func separator(text []byte) rune {
 	return ','
 }
 
-// judgeHeadings matches headings with fields.
+// judgeHeadings matches headings with fields. A wrong heading is a fault; the rows
+// are read all the same, so that their faults are reported with it, and a heading
+// that is nearly a field that is missing is read as that field.
 func (t *table) judgeHeadings(required []string) bool {
-	known := tableFields[t.name]
+	byHeading := t.knownHeadings()
+	t.fields = make([]string, len(t.headings))
+	for i, h := range t.headings {
+		f, ok := byHeading[strings.ToLower(h)]
+		switch {
+		case !ok && (passedOver(h) || h == ""): // spreadsheets append empty columns; a cell in one is a fault, see Read
+			continue
+		case !ok:
+			known := slices.Collect(maps.Keys(byHeading))
+			t.fault(i, "unknown column %q: %s", h, fault.Suggest(h, known))
+			near, found := fault.Nearest(h, known)
+			if f = byHeading[near]; !found || t.has(f) || slices.Contains(t.headings, near) {
+				continue
+			}
+		case t.has(f):
+			t.fault(i, "column %q stands twice, first as column %d", h, t.column[f]+1)
+			continue
+		}
+		t.column[f], t.fields[i] = i, f
+	}
+	return t.judgeRequired(required)
+}
+
+// knownHeadings gives the field of each heading that the table may have, in small letters.
+func (t *table) knownHeadings() map[string]string {
 	byHeading := map[string]string{}
-	for _, f := range known {
+	for _, f := range tableFields[t.name] {
 		byHeading[strings.ToLower(f)] = f
 	}
 	for f, h := range t.renames {
 		delete(byHeading, f)
 		byHeading[strings.ToLower(h)] = f
 	}
-	good := true
-	t.fields = make([]string, len(t.headings))
-	for i, h := range t.headings {
-		f, ok := byHeading[strings.ToLower(h)]
-		switch {
-		case !ok && passedOver(h):
-		case !ok && h == "": // spreadsheets append empty columns; a cell in one is a fault, see Read
-		case !ok:
-			t.fault(i, "unknown column %q: %s", h, fault.Suggest(h, slices.Collect(maps.Keys(byHeading))))
-			good = false
-		default:
-			if first, twice := t.column[f]; twice {
-				t.fault(i, "column %q stands twice, first as column %d", h, first+1)
-				good = false
-				continue
-			}
-			t.column[f], t.fields[i] = i, f
-		}
-	}
-	return t.judgeRequired(required) && good
+	return byHeading
+}
+
+func (t *table) has(field string) bool {
+	_, ok := t.column[field]
+	return ok
 }
 
 func (t *table) judgeRequired(required []string) bool {
 	good := true
 	for _, f := range required {
-		if _, ok := t.column[f]; ok {
+		if t.has(f) {
 			continue
 		}
 		heading := f

@@ -17,8 +17,9 @@ var PipeColumns = []Column[PipeRow]{
 	{"material", []string{"material"}, Text, func(r *PipeRow) Value { return T(r.Pipe.Material) }},
 	{"area", []string{"area,", "total"}, Area, func(r *PipeRow) Value { return N(r.Run.Area) }},
 	{"ca", []string{"C × area,", "total"}, Area, func(r *PipeRow) Value { return N(r.Run.CA) }},
-	{"time", []string{"time"}, Minutes, func(r *PipeRow) Value { return rained(r, r.Run.Time) }},
-	{"intensity", []string{"intensity"}, Intensity, func(r *PipeRow) Value { return rained(r, r.Run.Intensity) }},
+	{"ca_counted", []string{"C × area,", "counted"}, Area, func(r *PipeRow) Value { return Value{Number: r.Run.CACounted, OK: r.Partial} }},
+	{"time", []string{"time"}, Minutes, func(r *PipeRow) Value { return running(r, r.Run.Time) }},
+	{"intensity", []string{"intensity"}, Intensity, func(r *PipeRow) Value { return running(r, r.Run.Intensity) }},
 	{"inflow", []string{"steady", "inflow"}, Flow, func(r *PipeRow) Value { return N(r.Run.Inflow) }},
 	{"flow", []string{"design", "flow"}, Flow, func(r *PipeRow) Value { return N(r.Run.Flow) }},
 	{"capacity", []string{"full-bore", "capacity"}, Flow, func(r *PipeRow) Value { return Value{Number: r.Run.Capacity, OK: r.Run.HasCapacity} }},
@@ -40,7 +41,7 @@ var PipeColumns = []Column[PipeRow]{
 // PipeGroups are the tables into which the columns of a pipe are split for
 // people, in the order of a hand calculation.
 var PipeGroups = []Group{
-	{"Flow in the pipes", []string{"id", "from", "to", "area", "ca", "time", "intensity", "inflow", "flow", "travel_time"}},
+	{"Flow in the pipes", []string{"id", "from", "to", "area", "ca", "ca_counted", "time", "intensity", "inflow", "flow", "travel_time"}},
 	{"Section and uniform flow", []string{"id", "size", "n", "slope", "flow", "capacity", "capacity_ratio", "depth", "depth_ratio", "velocity", "velocity_full"}},
 	{"Critical state and levels", []string{"id", "critical_depth", "froude", "regime", "length", "invert_upper", "invert_lower", "cover_upper", "cover_lower"}},
 }

@@ -12,6 +12,7 @@ import (
 type PipeRow struct {
 	Pipe     *network.Pipe
 	Run      *sweep.Pipe
+	Partial  bool // the peak is by partial area
 	From, To string
 
 	Size                   Value
@@ -25,7 +26,7 @@ type PipeRow struct {
 func Pipe(r *analysis.Result, storm *analysis.StormRun, i network.PipeIndex) PipeRow {
 	p, run := &r.Network.Pipes[i], &storm.Flows.Pipes[i]
 	row := PipeRow{
-		Pipe: p, Run: run, Size: SizeValue(p),
+		Pipe: p, Run: run, Size: SizeValue(p), Partial: storm.Storm.Peak == network.PartialArea,
 		From: r.Network.Structures[p.From].ID, To: r.Network.Structures[p.To].ID,
 		CoverUpper: r.Network.Cover(p, network.Upper), CoverLower: r.Network.Cover(p, network.Lower),
 	}
@@ -58,9 +59,6 @@ func SizeText(p *network.Pipe) string {
 func Regime(run *sweep.Pipe) string { return regimes[run.State] }
 
 var regimes = [...]string{sweep.Dry: "dry", sweep.PartFull: "part-full", sweep.Full: "full"}
-
-// rained gives a value only where an area drains to the pipe.
-func rained(r *PipeRow, v float64) Value { return Value{Number: v, OK: r.Run.Rained()} }
 
 // running gives a value only where water flows.
 func running(r *PipeRow, v float64) Value { return Value{Number: v, OK: r.Run.State != sweep.Dry} }

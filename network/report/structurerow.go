@@ -55,7 +55,7 @@ var StructureColumns = []Column[StructureRow]{
 	{"rim", []string{"rim"}, Level, func(r *StructureRow) Value { return M(r.Structure.Rim) }},
 	{"area", []string{"area,", "total"}, Area, func(r *StructureRow) Value { return N(r.Run.Area) }},
 	{"ca", []string{"C × area,", "total"}, Area, func(r *StructureRow) Value { return N(r.Run.CA) }},
-	{"time", []string{"time"}, Minutes, func(r *StructureRow) Value { return Value{Number: r.Run.Time, OK: r.Run.Rained()} }},
+	{"time", []string{"time"}, Minutes, func(r *StructureRow) Value { return Value{Number: r.Run.Time, OK: r.Run.Flow > 0} }},
 	{"flow", []string{"flow"}, Flow, func(r *StructureRow) Value { return N(r.Run.Flow) }},
 	{"lowest_invert_in", []string{"lowest", "invert in"}, Level, func(r *StructureRow) Value { return M(r.LowestIn) }},
 	{"lowest_invert_out", []string{"lowest", "invert out"}, Level, func(r *StructureRow) Value { return M(r.LowestOut) }},

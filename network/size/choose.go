@@ -86,6 +86,9 @@ func (c *Chooser) Choose(i network.PipeIndex, flow float64) {
 	c.settle(i, p, last)
 }
 
+// levelRoom is the room left for the arithmetic when two levels are compared, ft or m.
+const levelRoom = 1e-6
+
 // sameArea is the room left for the arithmetic when two full areas are compared.
 const sameArea = 1 - 1e-9
 
@@ -135,7 +138,7 @@ func (c *Chooser) try(p *network.Pipe, candidate Candidate, flow float64) trial 
 
 // settle writes a trial into its pipe.
 func (c *Chooser) settle(i network.PipeIndex, p *network.Pipe, t trial) {
-	if !p.InvertUpper.OK && t.upper > t.bounds.upperHigh {
+	if !p.InvertUpper.OK && t.upper > t.bounds.upperHigh+levelRoom {
 		c.remarks = append(c.remarks, Remark{i, BoundsCross, t.upper, t.bounds.upperHigh})
 	}
 	p.Size, p.Section, p.Wall, p.HasWall = t.Size, t.Section, t.Wall, t.HasWall

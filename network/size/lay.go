@@ -53,15 +53,20 @@ func (c *Chooser) layToLower(p *network.Pipe, b bounds, need, steep float64) lai
 	return laid{upper, lower, (upper - lower) / p.Length}
 }
 
-// highest is the upper invert where none is given: as high as it may be, lower
-// where the steepest slope would leave too little cover at the lower end, and
-// higher where the lower bounds ask for it.
+// highest is the upper invert where none is given: as high as it may be. Where
+// the ground falls more steeply than the pipe may, the rest of its fall is taken
+// by a drop at the upper structure; where that leaves too little cover at the
+// lower end, the pipe goes deeper still. The lower bounds win over all of these.
 func (c *Chooser) highest(p *network.Pipe, b bounds, need, steep float64) float64 {
-	upper := c.step.down(min(b.upperHigh, b.lowerHigh+steep*p.Length))
+	upper := b.upperHigh
+	if ground, ok := c.groundSlope(p); ok && ground > steep {
+		upper -= (ground - steep) * p.Length
+	}
+	upper = c.step.down(min(upper, b.lowerHigh+steep*p.Length))
 	if upper < b.upperLow {
 		upper = c.step.up(b.upperLow)
 	}
-	if upper <= b.lowerLow { // the bounds cross: the lower one wins
+	if upper <= b.lowerLow { // the bounds cross
 		upper = c.step.up(b.lowerLow + need*p.Length)
 	}
 	return upper

@@ -24,9 +24,7 @@ func (h hydraulics) leastSlope(c *network.Criteria) float64 {
 	case network.FullBore:
 		s = max(s, h.slopeFor(c.MinVelocity, h.section.Rise()))
 	case network.AtDesignDepth:
-		if depth, ok := h.depthAt(c.MinVelocity); ok {
-			s = max(s, h.slopeFor(c.MinVelocity, depth))
-		}
+		s = max(s, h.slopeForDesignVelocity(c.MinVelocity))
 	}
 	if c.MinShear.OK && h.flow > 0 {
 		s = max(s, h.slopeForShear(c.MinShear.V, c.MaxSlope))
@@ -34,18 +32,46 @@ func (h hydraulics) leastSlope(c *network.Criteria) float64 {
 	return s
 }
 
+// slopeForDesignVelocity is the least slope on which the flow runs at a velocity.
+//
+// As the slope grows, a pipe runs over its capacity with V = Q/A full, until at
+// the slope that just carries the flow the depth falls at once to the lower depth
+// of full-bore capacity; from there depth and velocity change steadily.
+func (h hydraulics) slopeForDesignVelocity(velocity float64) float64 {
+	rise := h.section.Rise()
+	switch {
+	case h.flow <= 0 || h.flow >= velocity*h.section.At(rise).Area:
+		return 0 // any slope will do
+	case h.flow >= velocity*h.section.At(h.brimming()).Area:
+		return h.slopeFor(h.flow/h.section.At(rise).Area, rise) // that just carries it
+	}
+	return h.slopeFor(velocity, h.depthOf(h.flow/velocity))
+}
+
 // steepestSlope is the greatest slope that keeps to the greatest slope and
-// velocity of the criteria. A pipe that runs full at that velocity is steep
-// enough; whether it then carries the peak is another question.
+// velocity of the criteria; 0 where the flow is too fast on any slope.
 func (h hydraulics) steepestSlope(c *network.Criteria) float64 {
-	if h.flow <= 0 {
+	rise, area := h.section.Rise(), h.flow/c.MaxVelocity
+	switch full := h.section.At(rise).Area; {
+	case h.flow <= 0:
 		return c.MaxSlope
+	case area > full:
+		return 0
+	case area > h.section.At(h.brimming()).Area: // just too flat to carry the flow, see slopeForDesignVelocity
+		return min(c.MaxSlope, h.slopeFor(h.flow/full, rise)*(1-1e-9))
 	}
-	depth, ok := h.depthAt(c.MaxVelocity)
+	return min(c.MaxSlope, h.slopeFor(c.MaxVelocity, h.depthOf(area)))
+}
+
+// brimming is the lower of the two depths that carry the full-bore capacity; it
+// depends on the section alone.
+func (h hydraulics) brimming() float64 {
+	m := pipeflow.Manning{Factor: 1, N: 1, Slope: 1}
+	depth, ok := m.NormalDepth(h.section, m.FullFlow(h.section))
 	if !ok {
-		depth = h.section.Rise()
+		return h.section.Rise()
 	}
-	return min(c.MaxSlope, h.slopeFor(c.MaxVelocity, depth))
+	return depth
 }
 
 // slopeFor is the slope on which water of a depth runs at a velocity, from
@@ -56,28 +82,20 @@ func (h hydraulics) slopeFor(velocity, depth float64) float64 {
 	return root * root
 }
 
-// depthAt is the depth at which the flow has a velocity, by continuity; ok is
-// false where the flow would fill the section at that velocity, or there is none.
-func (h hydraulics) depthAt(velocity float64) (depth float64, ok bool) {
-	if velocity <= 0 || h.flow <= 0 {
-		return 0, false
-	}
-	area, rise := h.flow/velocity, h.section.Rise()
-	if area >= h.section.At(rise).Area {
-		return 0, false
-	}
-	// Bisection: the area grows with depth, and 60 halvings leave less than the
-	// last digit of a float64.
-	low, high := 0.0, rise
+// depthOf is the depth at which the section has a wetted area less than its full
+// one. Bisection: the area grows with depth, and 60 halvings leave less than the
+// last digit of a float64.
+func (h hydraulics) depthOf(area float64) float64 {
+	low, high := 0.0, h.section.Rise()
 	for range 60 {
-		depth = (low + high) / 2
+		depth := (low + high) / 2
 		if h.section.At(depth).Area < area {
 			low = depth
 		} else {
 			high = depth
 		}
 	}
-	return high, true
+	return high
 }
 
 // slopeForShear is the least slope, up to the greatest one, on which the boundary

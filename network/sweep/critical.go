@@ -5,12 +5,9 @@ import (
 	"rimfall/pipeflow"
 )
 
-// CriticalDepth is the critical depth of a pipe's design flow, of one barrel;
-// none where nothing flows, or where a flat roof leaves no room for it.
+// CriticalDepth is the critical depth of a pipe's design flow, of one barrel: 0
+// where nothing flows, none where a flat roof leaves no room for it.
 func (p *Pipe) CriticalDepth(pipe *network.Pipe, gravity float64) network.Maybe {
-	if p.State == Dry {
-		return network.Maybe{}
-	}
 	depth, ok := pipeflow.CriticalDepth(pipe.Section, gravity, p.Flow/float64(pipe.Count))
 	return network.Maybe{V: depth, OK: ok}
 }

@@ -23,9 +23,10 @@ const (
 // barrels together, depth and velocity of one.
 type Pipe struct {
 	Area, CA  float64 // totals upstream, acre or ha
+	CACounted float64 // what counts at the peak: CA with longest-time peaks
 	Inflow    float64 // steady flows upstream, cfs or m³/s
-	Time      float64 // at the upper end, min; none where CA is 0
-	Intensity float64 // in/h or mm/h, uplift included; none where CA is 0
+	Time      float64 // that governs at the upper end, min; the minimum where CA is 0
+	Intensity float64 // at that time, in/h or mm/h, uplift included
 	Flow      float64 // peak
 	Held      bool    // Flow is the larger peak of a pipe upstream
 
@@ -38,14 +39,16 @@ type Pipe struct {
 	BelowFirst  bool    // the time is shorter than the first duration of the rainfall
 }
 
-// Rained tells whether any area drains to the pipe, so that time and intensity exist.
+// Rained tells whether any area with runoff drains to the pipe; only then is its
+// time handed on.
 func (p *Pipe) Rained() bool { return p.CA > 0 }
 
 // Structure is what the pass finds at one structure.
 type Structure struct {
 	Area, CA, Inflow float64 // totals upstream and here
-	Time, Intensity  float64 // none where CA is 0
-	Flow             float64 // factor·ΣCA·i + inflow
+	CACounted        float64 // what counts at the peak
+	Time, Intensity  float64 // that govern; the minimum time where CA is 0
+	Flow             float64 // factor·CACounted·i + inflow
 	BelowFirst       bool
 	Beyond           bool // the time is beyond the rainfall: there is no flow
 }

@@ -22,16 +22,23 @@ func Down(n *network.Network, storm *network.Storm, rain hydrology.Intensity, ch
 	if storm.FrequencyFactor {
 		d.frequency = hydrology.FrequencyFactor(storm.ReturnPeriod)
 	}
+	if storm.Peak == network.PartialArea {
+		d.arrivals = make(arrivals, len(n.Pipes))
+	}
 	for _, s := range order {
 		d.gather(s)
 		d.peak(s)
-		for _, p := range n.PipesOut(s) {
+		out := n.PipesOut(s)
+		for k, p := range out {
 			d.enter(s, p)
 			if choose != nil {
 				choose.Choose(p, d.flows.Pipes[p].Flow)
 			}
 			d.uniform(p)
 			d.travel(p)
+			if d.arrivals != nil {
+				d.sendArrivals(p, n.Pipes[p].Share.Or(1), k == len(out)-1)
+			}
 		}
 	}
 	return d.flows, d.problems()
@@ -44,6 +51,9 @@ type pass struct {
 	rain      hydrology.Intensity
 	flows     Flows
 	frequency float64 // Cf on every runoff coefficient
+
+	arrivals arrivals                 // nil with longest-time peaks
+	reached  []hydrology.Contribution // at the structure in hand
 }
 
 // Coefficient is C·Cf of an area, not over 1.
@@ -73,18 +83,18 @@ func (d *pass) gather(s network.StructureIndex) {
 	}
 }
 
-// peak is the Rational peak at a structure.
+// peak is the Rational peak at a structure. Where only steady inflow arrives, the
+// time is the minimum and rain adds nothing.
 func (d *pass) peak(s network.StructureIndex) {
 	at := &d.flows.Structures[s]
-	at.Flow = at.Inflow
-	if !at.Rained() {
-		at.Time = 0
+	i, where := d.rain.At(at.Time)
+	at.Intensity, at.CACounted = i, at.CA
+	at.Flow = at.Inflow + hydrology.Rational(d.storm.RationalFactor, at.CA, i)
+	if d.arrivals != nil {
+		d.partialPeak(s)
 		return
 	}
-	i, where := d.rain.At(at.Time)
 	at.BelowFirst, at.Beyond = where == hydrology.Below, where == hydrology.Beyond
-	at.Intensity = i
-	at.Flow += hydrology.Rational(d.storm.RationalFactor, at.CA, i)
 }
 
 // enter gives a pipe its share of what has gathered at its upper structure.
@@ -93,10 +103,8 @@ func (d *pass) enter(s network.StructureIndex, p network.PipeIndex) {
 	share := d.n.Pipes[p].Share.Or(1)
 	out.Area, out.CA, out.Inflow = share*at.Area, share*at.CA, share*at.Inflow
 	out.Time, out.Intensity, out.BelowFirst = at.Time, at.Intensity, at.BelowFirst
-	out.Flow = out.Inflow
-	if out.Rained() {
-		out.Flow += hydrology.Rational(d.storm.RationalFactor, out.CA, out.Intensity)
-	}
+	out.CACounted = share * at.CACounted
+	out.Flow = out.Inflow + hydrology.Rational(d.storm.RationalFactor, out.CACounted, out.Intensity)
 	if d.storm.HoldUpstreamPeak {
 		for _, in := range d.n.PipesIn(s) {
 			if held := share * d.flows.Pipes[in].Flow; held > out.Flow {
