@@ -25,7 +25,7 @@ type curve struct {
 func (c *curve) lay(w *water, p path, sign, distance float64) {
 	c.path, c.count, c.reach = p, 0, 0
 	c.start, _ = p.at(0)
-	at, width := 0.0, min(1, p.end)
+	at, width := 0.0, w.firstWidth(&p, sign, distance)
 	for trial := 1; at < p.end && c.count < maxPanels; trial++ {
 		last := c.count == maxPanels-1 || trial >= maxTrials
 		if width = min(width, p.end-at); last && !math.IsInf(p.end, 1) {
@@ -46,8 +46,33 @@ func (c *curve) lay(w *water, p path, sign, distance float64) {
 		}
 		at += width
 		width *= max(1, fitting(m.roughness()))
+		if ahead := ample * (distance - c.reach) / m.speedAtEnd(); ahead > 0 {
+			width = min(width, ahead)
+		}
 	}
 }
+
+// firstWidth is the width of the first panel, at most 1: what the distance takes by the speed near the control. At
+// critical depth the speed is 0 and grows evenly, elsewhere it hardly changes.
+func (w *water) firstWidth(p *path, sign, distance float64) float64 {
+	const near = 0.02
+	widest := min(1, p.end)
+	probe := near * widest
+	if probe == 0 {
+		return 0
+	}
+	width := distance / (sign * w.speed(p, probe))
+	if p.critical {
+		width = math.Sqrt(2 * probe * width)
+	}
+	if !(width > 0) {
+		return widest
+	}
+	return max(probe, min(ample*width, widest))
+}
+
+// ample is the factor by which a panel is laid wider than the distance seems to take, so that it covers it in one.
+const ample = 1.3
 
 // narrower is the share of its width to which a panel is to be cut, 1 where it stands; reached tells whether it takes
 // the curve over the distance asked for.
@@ -58,7 +83,7 @@ func (c *curve) narrower(m *panel, distance float64) (share float64, reached boo
 	if c.reach+m.length < distance {
 		return 1, false
 	}
-	if used := (m.find(distance-c.reach) + 1) / 2; used < 0.5 {
+	if used := (m.find(distance-c.reach) + 1) / 2; used < 0.3 {
 		return max(1.2*used, 0.02), true
 	}
 	return 1, true

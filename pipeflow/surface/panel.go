@@ -111,6 +111,15 @@ func (m *panel) along(t float64) (distance, rate float64) {
 	return distance, rate
 }
 
+// speedAtEnd is ds/du at the end of the panel, where every Legendre polynomial is 1.
+func (m *panel) speedAtEnd() float64 {
+	sum := 0.0
+	for _, c := range m.series {
+		sum += c
+	}
+	return 2 * sum / m.width
+}
+
 // find is the place t at a distance from the beginning of the panel, by Newton's method kept between bounds that close
 // in. Distance grows along a panel, so there is one. The end 1e-9 of the panel is far below the error of the series.
 func (m *panel) find(distance float64) float64 {

@@ -11,6 +11,7 @@ type path struct {
 	from, to float64 // z at u = 0, and at the end
 	decays   bool    // z - to falls off as exp(-u), to being normal depth; else z goes to its end evenly with u
 	end      float64 // u at the end of the path
+	critical bool    // it begins at critical depth, where the surface is upright
 	endless  bool    // what is left at the end goes on for ever, at normal depth
 }
 

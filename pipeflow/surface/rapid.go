@@ -13,17 +13,20 @@ type rapid struct {
 // lay draws the surface from a depth at the upper end: to normal depth on a steep slope, else up to critical depth.
 func (r *rapid) lay(w *water, d Depths, steep bool, start, length float64) {
 	r.length, r.start, r.bottom = length, start, 0
-	below := d.HasNormal && d.Normal <= d.Critical
-	switch {
+	var way path
+	switch below := d.HasNormal && d.Normal <= d.Critical; {
 	case below && nearly(start, d.Normal):
-		r.curve.lay(w, w.toNormal(d.Normal, d.Normal), -1, length)
-		return
+		way = w.toNormal(d.Normal, d.Normal)
 	case below && (steep || start < d.Normal || !w.rises(start)):
-		r.curve.lay(w, w.toNormal(start, d.Normal), -1, length)
-		return
+		way = w.toNormal(start, d.Normal)
+	default:
+		way = w.newPath(start, d.Critical)
 	}
-	r.curve.lay(w, w.newPath(start, d.Critical), -1, length)
-	r.bottom = max(0, length-r.curve.reach)
+	way.critical = start == d.Critical && d.HasCritical
+	r.curve.lay(w, way, -1, length)
+	if !way.endless {
+		r.bottom = max(0, length-r.curve.reach)
+	}
 }
 
 // depth is the depth at a distance from the lower end.

@@ -46,6 +46,7 @@ func (t *tranquil) lay(d Depths, steep bool, level, length float64) {
 	}
 	var way path
 	way, t.goal = w.course(d, steep, start)
+	way.critical = start == d.Critical
 	t.free.lay(w, way, 1, length-t.drowned)
 	if t.goal != toNormal && t.drowned+t.free.reach < length {
 		t.top = t.drowned + t.free.reach
