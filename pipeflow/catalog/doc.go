@@ -13,7 +13,8 @@
 // from ASTM C76 for 12 to 96 in. Roughness comes from three agencies' tables, named at the head of materials.csv.
 //
 // What is known to be approximate:
-//   - Ellipses of C507 are true ellipses here; the standard builds them of arcs, with mostly 2.5 to 4 percent more area (30 x 19 in: 6).
+//   - Ellipses of C507 are true ellipses here; the standard builds them of arcs, with mostly 2.5 to 4 percent more
+//     area (30 x 19 in: 6).
 //   - Arches of C506 and pipe-arches of M36 are built from the radii listed. Where the four published dimensions do not
 //     close exactly, span and rise are kept. The smallest pipe-arches (17 x 13 to 28 x 20 in) come out 7 to 13 percent
 //     larger in area than makers print; from 35 x 24 in on the difference is under 5 percent.

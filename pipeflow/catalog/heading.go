@@ -24,8 +24,8 @@ func (t table) match(known, required []string) (where map[string]int, faults []F
 		switch {
 		case strings.HasPrefix(name, "x_"), strings.HasPrefix(name, "note"), name == "":
 		case !slices.Contains(known, name):
-			faults = append(faults, h.fault("unknown column %q: did you mean %q? (a heading that starts with x_ or note is left alone)",
-				h.text, nearest(name, known)))
+			faults = append(faults, h.fault("unknown column %q: did you mean %q? (a heading that starts with x_ or note is "+
+				"left alone)", h.text, nearest(name, known)))
 		case double:
 			faults = append(faults, h.fault("column %q stands twice: keep one", name))
 		default:
@@ -62,7 +62,8 @@ func (t table) named(cells []cell, where map[string]int) (row, []Fault) {
 	}
 	if len(cells) > len(t.headings) {
 		extra := cells[len(t.headings)]
-		return named, []Fault{extra.fault("%d cells under %d headings: quote a cell that holds the separator", len(cells), len(t.headings))}
+		return named, []Fault{extra.fault("%d cells under %d headings: quote a cell that holds the separator",
+			len(cells), len(t.headings))}
 	}
 	return named, nil
 }

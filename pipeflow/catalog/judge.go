@@ -24,9 +24,11 @@ func judgeProportion(s Size, at row) []Fault {
 	arch := s.Shape == Arch || s.Shape == PipeArch
 	switch {
 	case s.Shape == Circle && s.Span != s.Rise:
-		return []Fault{at["rise"].fault("rise %g of a circle differs from its span %g: leave it blank, or make the shape an ellipse", s.Rise, s.Span)}
+		return []Fault{at["rise"].fault("rise %g of a circle differs from its span %g: leave it blank, or make the "+
+			"shape an ellipse", s.Rise, s.Span)}
 	case s.Shape == UprightEllipse && s.Span > s.Rise:
-		return []Fault{at["span"].fault("span %g is over rise %g: an upright ellipse is higher than wide; swap them or write %q", s.Span, s.Rise, Ellipse)}
+		return []Fault{at["span"].fault("span %g is over rise %g: an upright ellipse is higher than wide; swap "+
+			"them or write %q", s.Span, s.Rise, Ellipse)}
 	case (s.Shape == Ellipse || arch) && s.Span < s.Rise:
 		return []Fault{at["span"].fault("span %g is under rise %g: this shape is wider than high; swap them", s.Span, s.Rise)}
 	case s.Haunch > 0 && s.Shape != Box:

@@ -52,7 +52,8 @@ func inOrder(faults []Fault) []Fault {
 func double(seen map[Size]int, s Size, at row) []Fault {
 	key := Size{Units: s.Units, Shape: s.Shape, Material: s.Material, Series: s.Series, Span: s.Span, Rise: s.Rise}
 	if line, twice := seen[key]; twice {
-		return []Fault{at["span"].fault("size %s of series %q stands in line %d already: give it another series or take one out", s.Label(), s.Series, line)}
+		return []Fault{at["span"].fault("size %s of series %q stands in line %d already: give it another series or take "+
+			"one out", s.Label(), s.Series, line)}
 	}
 	seen[key] = at["span"].line
 	return nil
