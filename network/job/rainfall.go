@@ -97,8 +97,11 @@ func (t *table) intensities(duration int, columns []int) (durations []float64, v
 func (t *table) cell(record []string, i int, what string) float64 {
 	text := strings.TrimSpace(record[i])
 	v, ok := parseNumber(text, t.comma)
-	if !ok {
+	switch {
+	case !ok:
 		t.fault(i, "%s: %q is no number: %s", what, text, whyNoNumber(text, t.comma))
+	case v <= 0:
+		t.fault(i, "%s = %s: it must be over 0", what, text)
 	}
 	return v
 }

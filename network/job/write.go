@@ -87,6 +87,9 @@ func replaceFolder(temporary, dir string) error {
 // path stays where it is.
 func (j *Job) writeInto(dir string, completed *network.Network) error {
 	settings := j.files[File]
+	if j.settings.values["title"] == nil { // the title is the folder's name, which changes
+		settings = append([]byte("title = "+strconv.Quote(j.Settings.Title)+"\n"), settings...)
+	}
 	for _, name := range slices.Sorted(maps.Keys(j.files)) {
 		text, local := j.files[name], name
 		switch {
