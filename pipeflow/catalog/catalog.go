@@ -84,10 +84,10 @@ func (c Catalog) Sizes(units string, shape Shape) []Size {
 func (c Catalog) Default(units string) []Size { return c.ForMaterial(units, "", Circle) }
 
 // ForMaterial lists the sizes of a shape from which a pipe of a material is chosen, ascending by rise, then span: its
-// first series, which is the user's own where there is one. A blank material is concrete. The list is empty where the
-// material is made to order or not in that shape.
+// first series, which is the user's own where there is one. A blank material is concrete, of a pipe-arch corrugated
+// metal. The list is empty where the material is made to order or not in that shape.
 func (c Catalog) ForMaterial(units, material string, shape Shape) []Size {
-	name, ok := sizesOf(material)
+	name, ok := sizesOf(material, shape)
 	if !ok {
 		return nil
 	}
@@ -100,25 +100,34 @@ func (c Catalog) ForMaterial(units, material string, shape Shape) []Size {
 }
 
 // Find looks up a size of a material by span and rise in inches or millimetres, to a millionth of them (room for a
-// conversion there and back). The material's first series is asked first, then its others.
+// conversion there and back). The material's first series is asked first, then its others. An arch, whose radii are in
+// no other place, is then looked for in every material.
 func (c Catalog) Find(units, material string, shape Shape, span, rise float64) (Size, bool) {
-	name, ok := sizesOf(material)
-	if !ok {
-		return Size{}, false
-	}
-	k := kind{units, name, shape}
-	for _, series := range c.order[k] {
-		rows := c.groups[group{k, series}]
-		first, _ := slices.BinarySearchFunc(rows, rise*(1-same), func(s Size, rise float64) int {
-			return cmp.Compare(s.Rise, rise)
-		})
-		for _, s := range rows[first:] {
-			if s.Rise > rise*(1+same) {
-				break
-			}
-			if math.Abs(s.Span-span) <= same*span {
+	if name, ok := sizesOf(material, shape); ok {
+		k := kind{units, name, shape}
+		for _, series := range c.order[k] {
+			if s, ok := find(c.groups[group{k, series}], span, rise); ok {
 				return s, true
 			}
+		}
+	}
+	if shape != Arch && shape != PipeArch {
+		return Size{}, false
+	}
+	return find(c.Sizes(units, shape), span, rise)
+}
+
+// find looks up a span and rise in rows sorted by rise, then span.
+func find(rows []Size, span, rise float64) (Size, bool) {
+	first, _ := slices.BinarySearchFunc(rows, rise*(1-same), func(s Size, rise float64) int {
+		return cmp.Compare(s.Rise, rise)
+	})
+	for _, s := range rows[first:] {
+		if s.Rise > rise*(1+same) {
+			break
+		}
+		if math.Abs(s.Span-span) <= same*span {
+			return s, true
 		}
 	}
 	return Size{}, false

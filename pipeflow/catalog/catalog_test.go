@@ -55,7 +55,7 @@ func TestASizeThatIsNotListedHasNoWall(t *testing.T) {
 		{"a size between the standard ones", US, "concrete", Circle, 37, 37},
 		{"the rise of one size with the span of another", US, "concrete", Ellipse, 60, 43},
 		{"a material built to order", US, "brick", Circle, 36, 36},
-		{"a shape that the material is not made in", US, "pvc", Arch, 58.5, 36},
+		{"a shape that the material is not made in", US, "pvc", Ellipse, 60, 38},
 		{"a material with sizes but no walls listed", US, "clay", Circle, 12, 12},
 		{"a size of the other unit", SI, "concrete", Circle, 36, 36},
 	}
@@ -193,6 +193,30 @@ func TestAUsersSeriesIsChosenFromAndReplacesItsNamesake(t *testing.T) {
 	}
 	if wall, _ := Wall(US, "concrete", Circle, 18, 18); wall != 2.5 {
 		t.Errorf("the standard catalogue has changed: %g", wall)
+	}
+}
+
+func TestAnArchIsFoundByItsSizeWhateverItsMaterial(t *testing.T) {
+	cases := []struct {
+		name, material string
+		shape          Shape
+		span, rise     float64
+		series         string
+	}{
+		{"a pipe-arch without material", "", PipeArch, 57, 38, "corrugated metal pipe-arch 2-2/3 x 1/2 in"},
+		{"a pipe-arch of another corrugation", "corrugated-metal", PipeArch, 58.5, 48.5, "corrugated metal pipe-arch 3 x 1 in"},
+		{"an arch without material", "", Arch, 58.5, 36, "arch reinforced concrete"},
+		{"an arch of cast iron", "cast-iron", Arch, 58.5, 36, "arch reinforced concrete"},
+	}
+	for _, c := range cases {
+		t.Run(c.name, func(t *testing.T) {
+			if s, ok := Find(US, c.material, c.shape, c.span, c.rise); !ok || s.Series != c.series {
+				t.Errorf("%q, %v, want %q", s.Series, ok, c.series)
+			}
+		})
+	}
+	if list := ForMaterial(US, "", PipeArch); len(list) != 12 {
+		t.Errorf("%d pipe-arches to choose from", len(list))
 	}
 }
 

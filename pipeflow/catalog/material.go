@@ -30,9 +30,13 @@ func MaterialByName(name string) (m Material, ok bool) {
 	return all[i], true
 }
 
-// sizesOf is the material whose sizes a pipe takes: concrete where the pipe has no material.
-func sizesOf(material string) (name string, ok bool) {
-	if material == "" {
+// sizesOf is the material whose sizes a pipe takes. A pipe without material is of concrete, a pipe-arch of corrugated
+// metal.
+func sizesOf(material string, shape Shape) (name string, ok bool) {
+	switch {
+	case material == "" && shape == PipeArch:
+		return "corrugated-metal", true
+	case material == "":
 		return "concrete", true
 	}
 	m, ok := MaterialByName(material)

@@ -126,9 +126,9 @@ func TestAHigherLevelNeverLowersTheUpperEndOfAMildPipe(t *testing.T) {
 	})
 }
 
-// Distance worked out with 20,000 equal steps of √(rise - y), middle values, for every shape and curve: the depth of
-// the profile at that distance is the depth stepped to, off critical depth by 1 % of the rise. Within 2e-4 of the
-// rise, and 1e-3 where the outline has corners (the most of 40,000: 9e-5 and 5.2e-4).
+// Distance worked out with 20,000 equal steps of √(rise - y), middle values, for every shape and curve: the depth of the
+// profile at that distance is the depth stepped to, off critical depth by 1 % of the rise. Within 5e-4 of the rise, and
+// 1e-3 where the outline has corners (the most of 40,000: 1.6e-4 and 5.6e-4).
 func TestSurfacesAgreeWithAFineSum(t *testing.T) {
 	check.Check(t, func(r *check.T) {
 		d := draw(r)
@@ -155,7 +155,7 @@ func TestSurfacesAgreeWithAFineSum(t *testing.T) {
 		if sign < 0 {
 			at = pipe.Length - s
 		}
-		tolerance := 2e-4
+		tolerance := 5e-4
 		if d.shape == "haunched" || d.shape == "arch" {
 			tolerance = 1e-3
 		}
