@@ -10,6 +10,8 @@
 //	the jump                M above it = M below it              Chow 1959, section 15-1
 //	full stretch            the pressure line rises upstream by Sf a unit of length
 //
+// Chow's section and equation numbers are from memory.
+//
 // In a full stretch the specific force is Q²/(gA) + A (h - (rise - ȳ)), h the height of the pressure line over the
 // invert and ȳ the depth of the centroid below the crown: the same law with the water standing at h.
 //
