@@ -107,3 +107,23 @@ func (term Term) at(period float64) stormTerm {
 	}
 	return stormTerm{numerator, term.Shift, term.Exponent}
 }
+
+// Table reads an equation at durations (minutes, rising) and return periods, in unit. The error says what is out of
+// the equation's range.
+func (e Equation) Table(durations, periods []float64, unit IntensityUnit) (Table, error) {
+	values := make([][]float64, len(durations))
+	for _, period := range periods {
+		storm, err := e.Storm(period, unit)
+		if err != nil {
+			return Table{}, err
+		}
+		for row, minutes := range durations {
+			i, where := storm.At(minutes)
+			if where != Within {
+				return Table{}, fmt.Errorf("%v min is %s of the equation", minutes, where)
+			}
+			values[row] = append(values[row], i)
+		}
+	}
+	return NewTable(durations, periods, values)
+}

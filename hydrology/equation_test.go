@@ -165,6 +165,37 @@ func TestEquationsOutsideWhatTheyAreFor(t *testing.T) {
 	}
 }
 
+func TestTableOfAnEquation(t *testing.T) {
+	table, err := andradina.Table([]float64{10, 60, 1440}, []float64{2, 10}, MillimetresPerHour)
+	if err != nil {
+		t.Fatal(err)
+	}
+	if math.Abs(table.Values[1][1]-58.3) > 0.05 { // 60 min, 10 years, as in the example
+		t.Errorf("60 min, 10 years: %v mm/h", table.Values[1][1])
+	}
+	if _, err := andradina.Table([]float64{5, 60}, []float64{2}, MillimetresPerHour); err == nil {
+		t.Error("5 min came of an equation that starts at 10")
+	}
+}
+
+func TestEquationsInWords(t *testing.T) {
+	cases := []struct {
+		c    Constants
+		want string
+	}{
+		{Constants{Terms: []Term{{Numerator: 2001, Shift: 8, Exponent: 0.711, PeriodLogarithm: 0.811}}}, "i = 2001·(1 + 0.811·lg T)/(t + 8)^0.711"},
+		{Constants{Terms: []Term{{Numerator: 20, Exponent: 0.6, PeriodExponent: 0.2}}}, "i = 20·T^0.2/t^0.6"},
+		{Constants{Terms: []Term{{Numerator: 762, Shift: 10, Exponent: 1}}}, "i = 762/(t + 10)"},
+		{Constants{Cubic: [4]float64{5.0707, 0.6515, -0.2522, 0.0138}}, "ln i = 5.0707 + 0.6515·ln t − 0.2522·ln²t + 0.0138·ln³t"},
+		{andradina.Constants[0], "i = 34.5743/(t + 20)^0.8809 + 2.6906·(−0.4766 − 0.8977·ln ln(T/(T−1)))/(t + 10)^0.6683"},
+	}
+	for _, k := range cases {
+		if got := k.c.String(); got != k.want {
+			t.Errorf("got %q, want %q", got, k.want)
+		}
+	}
+}
+
 func TestJoinRefusesGapsAndSteps(t *testing.T) {
 	storms := ministryOfHealth1930()
 	if _, err := Join(storms[1], mustStorm(andradina, 10, MillimetresPerHour)); err == nil {

@@ -56,6 +56,9 @@ func (m Method) breaches(l Leg, s System) []Breach {
 	var breaches []Breach
 	for _, limit := range m.Limits {
 		value := limit.of.of(l)
+		if value == 0 { // not given, as the area often is
+			continue
+		}
 		inUS := value * in(s, 1, limit.of.usPerSI())
 		if inUS >= limit.Least && (limit.Greatest == 0 || inUS <= limit.Greatest*(1+1e-12)) { // rounding of the units
 			continue

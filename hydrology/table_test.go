@@ -1,6 +1,7 @@
 package hydrology
 
 import (
+	"fmt"
 	"math"
 	"slices"
 	"testing"
@@ -89,6 +90,19 @@ func TestBetweenColumns(t *testing.T) {
 			}
 		})
 	}
+}
+
+// NOAA Atlas 14, Pulaski, Virginia, 60 min, partial duration: 1.72 in at 10 years and 2.31 at 50. Between them at 25
+// years 2.06 is published; the line in ln T is not the atlas's own, and lands on its digits here.
+func ExampleTable_CurveBetween() {
+	table, err := NewTable([]float64{60}, []float64{10, 50}, [][]float64{{1.72, 2.31}})
+	if err != nil {
+		panic(err)
+	}
+	curve, _ := table.CurveBetween(25, PartialDuration)
+	i, _ := curve.At(60)
+	fmt.Printf("%.2f in/h\n", i)
+	// Output: 2.06 in/h
 }
 
 func TestNoStormOutsideTheColumns(t *testing.T) {

@@ -213,6 +213,17 @@ func TestTablesOfFittedStorms(t *testing.T) {
 	if i, _ := curve.At(60); math.Abs(i-40.5) > 0.05 { // published 40.5 mm in 1 h
 		t.Errorf("1 h, 100 years: %v mm/h", i)
 	}
+	// Between columns a table of annual maxima is linear in Gumbel's variate, and so is Gumbel's distribution: a storm
+	// of 40 years read between 25 and 50 is the distribution's own, but for rounding.
+	between, ok := table.CurveBetween(40, hydrology.AnnualMaximum)
+	f, err := Fit(maxima.Of(4), GumbelMoments)
+	if err != nil {
+		t.Fatal(err)
+	}
+	want, _ := f.Quantile(40)
+	if i, _ := between.At(60); !ok || math.Abs(i-want) > 1e-9 {
+		t.Errorf("1 h, 40 years: %v mm/h between the columns, %v by the distribution", i, want)
+	}
 	// Invented: the longer duration spreads so much that its rare storms are harder than the shorter one's.
 	steady := []float64{10, 10.1, 10.2, 10.3, 10.4, 10.5, 10.6, 10.7, 10.8, 10.9}
 	wild := []float64{1, 2, 3, 5, 8, 12, 16, 22, 30, 60}
