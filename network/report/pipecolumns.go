@@ -21,14 +21,14 @@ var PipeColumns = []Column[PipeRow]{
 	{"time", []string{"time"}, Minutes, func(r *PipeRow) Value { return running(r, r.Run.Time) }},
 	{"intensity", []string{"intensity"}, Intensity, func(r *PipeRow) Value { return running(r, r.Run.Intensity) }},
 	{"inflow", []string{"steady", "inflow"}, Flow, func(r *PipeRow) Value { return N(r.Run.Inflow) }},
-	{"flow", []string{"design", "flow"}, Flow, func(r *PipeRow) Value { return N(r.Run.Flow) }},
+	{"flow", []string{"peak", "flow"}, Flow, func(r *PipeRow) Value { return N(r.Run.Flow) }},
 	{"capacity", []string{"full-bore", "capacity"}, Flow, func(r *PipeRow) Value { return Value{Number: r.Run.Capacity, OK: r.Run.HasCapacity} }},
 	{"capacity_ratio", []string{"flow /", "capacity"}, Ratio, func(r *PipeRow) Value {
 		return Value{Number: r.Run.Flow / r.Run.Capacity, OK: r.Run.HasCapacity}
 	}},
 	{"depth", []string{"depth"}, Length, func(r *PipeRow) Value { return N(r.Run.Depth) }},
 	{"depth_ratio", []string{"depth /", "rise"}, Ratio, func(r *PipeRow) Value { return N(r.Run.Depth / r.Pipe.Section.Rise()) }},
-	{"velocity", []string{"velocity,", "design flow"}, Velocity, func(r *PipeRow) Value { return running(r, r.Run.Velocity) }},
+	{"velocity", []string{"velocity,", "peak flow"}, Velocity, func(r *PipeRow) Value { return running(r, r.Run.Velocity) }},
 	{"velocity_full", []string{"velocity,", "flowing full"}, Velocity, func(r *PipeRow) Value { return M(r.VelocityFull) }},
 	{"critical_depth", []string{"critical", "depth"}, Length, func(r *PipeRow) Value { return M(r.CriticalDepth) }},
 	{"froude", []string{"Froude", "number"}, Ratio, func(r *PipeRow) Value { return M(r.Froude) }},
@@ -44,6 +44,11 @@ var PipeGroups = []Group{
 	{"Flow in the pipes", []string{"id", "from", "to", "area", "ca", "ca_counted", "time", "intensity", "inflow", "flow", "travel_time"}},
 	{"Section and uniform flow", []string{"id", "size", "n", "slope", "flow", "capacity", "capacity_ratio", "depth", "depth_ratio", "velocity", "velocity_full"}},
 	{"Critical state and levels", []string{"id", "critical_depth", "froude", "regime", "length", "invert_upper", "invert_lower", "cover_upper", "cover_lower"}},
+}
+
+// CheckGroups are the tables of the check storm: what it changes.
+var CheckGroups = []Group{
+	{"Pipes", []string{"id", "time", "intensity", "flow", "capacity", "capacity_ratio", "depth", "depth_ratio", "velocity", "regime"}},
 }
 
 // Group is a table for people: a title and the keys of its columns.

@@ -26,7 +26,7 @@ func (c *Chooser) lay(p *network.Pipe, b bounds, need, steep float64) laid {
 	case p.InvertUpper.OK:
 		return c.layFrom(p, b, p.InvertUpper.V, need, steep)
 	}
-	return c.layFrom(p, b, c.highest(p, b, need, steep), need, steep)
+	return c.layFreely(p, b, need, steep)
 }
 
 // layOnSlope: the slope is given and no level. The lower invert follows the slope exactly.
@@ -53,43 +53,55 @@ func (c *Chooser) layToLower(p *network.Pipe, b bounds, need, steep float64) lai
 	return laid{upper, lower, (upper - lower) / p.Length}
 }
 
-// highest is the upper invert where none is given: as high as it may be. Where
-// the ground falls more steeply than the pipe may, the rest of its fall is taken
-// by a drop at the upper structure; where that leaves too little cover at the
-// lower end, the pipe goes deeper still. The lower bounds win over all of these.
-func (c *Chooser) highest(p *network.Pipe, b bounds, need, steep float64) float64 {
-	upper := b.upperHigh
-	if ground, ok := c.groundSlope(p); ok && ground > steep {
-		upper -= (ground - steep) * p.Length
-	}
-	upper = c.step.down(min(upper, b.lowerHigh+steep*p.Length))
+// layFreely: no level is given. The upper invert is as high as it may be, unless
+// the ground, or the cover at the lower end, asks for more slope than the pipe may
+// have: then the lower end lies where that slope would have put it, the pipe on
+// the steepest slope, and the rest of the fall is a drop at the upper structure.
+func (c *Chooser) layFreely(p *network.Pipe, b bounds, need, steep float64) laid {
+	upper := c.step.down(b.upperHigh)
 	if upper < b.upperLow {
 		upper = c.step.up(b.upperLow)
 	}
-	if upper <= b.lowerLow { // the bounds cross
+	if upper <= b.lowerLow { // the bounds cross: the lower one wins
 		upper = c.step.up(b.lowerLow + need*p.Length)
 	}
-	return upper
+	wanted := c.wantedSlope(p, b, upper, need)
+	if wanted <= steep {
+		return c.layFrom(p, b, upper, need, steep)
+	}
+	lower := c.step.down(upper - wanted*p.Length)
+	if lower < b.lowerLow {
+		lower = c.step.up(b.lowerLow)
+	}
+	upper = min(upper, c.step.down(lower+steep*p.Length))
+	if upper < b.upperLow || upper <= lower {
+		upper = c.step.up(max(b.upperLow, lower+need*p.Length))
+		lower = max(lower, c.step.up(upper-steep*p.Length))
+	}
+	return laid{upper, lower, (upper - lower) / p.Length}
 }
 
-// layFrom lays a pipe down from its upper invert: on the ground's slope where
-// that serves, else on the least slope; not steeper than allowed, and not below
-// the lower bound at its lower end.
-func (c *Chooser) layFrom(p *network.Pipe, b bounds, upper, need, steep float64) laid {
-	least := max(need, (upper-b.lowerHigh)/p.Length)
-	slope := least
+// wantedSlope is the ground's slope where that serves, else the least slope that
+// the criteria and the cover at the lower end ask for.
+func (c *Chooser) wantedSlope(p *network.Pipe, b bounds, upper, need float64) float64 {
+	slope := max(need, (upper-b.lowerHigh)/p.Length)
 	if ground, ok := c.groundSlope(p); ok {
 		slope = max(slope, ground)
 	}
-	slope = min(slope, steep)
-	target := upper - slope*p.Length
-	lowest := max(b.lowerLow, upper-steep*p.Length) // lower would break a limit
-	lower := c.step.down(target)
-	if lower < lowest-onStep/float64(c.step) {
-		lower = c.step.up(lowest)
-		if highest := upper - least*p.Length; lower > highest && b.lowerLow < c.step.down(highest) {
-			lower = c.step.down(highest) // no whole step lies between: the least slope holds
-		}
+	return slope
+}
+
+// layFrom lays a pipe down from its upper invert, not steeper than allowed and not
+// below the lower bound at its lower end. The lower invert is rounded down, so
+// that the least slope and the cover hold; up where down would be too steep.
+func (c *Chooser) layFrom(p *network.Pipe, b bounds, upper, need, steep float64) laid {
+	slope := min(c.wantedSlope(p, b, upper, need), steep)
+	lower := c.step.down(upper - slope*p.Length)
+	if steepest := upper - steep*p.Length; lower < steepest-onStep/float64(c.step) {
+		lower = c.step.up(upper - slope*p.Length)
+	}
+	if lower < b.lowerLow {
+		lower = c.step.up(b.lowerLow)
 	}
 	return laid{upper, lower, (upper - lower) / p.Length}
 }

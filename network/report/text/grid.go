@@ -18,7 +18,10 @@ type grid struct {
 	rows    [][]string
 }
 
-// makeGrid shows rows in columns; a column that is blank in every row is left out.
+// leftOutAtZero are the columns that tell nothing where every row is 0.
+var leftOutAtZero = map[string]bool{"inflow": true}
+
+// makeGrid shows rows in columns; a column that tells nothing in any row is left out.
 func makeGrid[R any](style report.Style, columns []report.Column[R], rows []R) grid {
 	var g grid
 	g.rows = make([][]string, len(rows))
@@ -29,8 +32,9 @@ func makeGrid[R any](style report.Style, columns []report.Column[R], rows []R) g
 		cells := make([]string, len(rows))
 		filled := false
 		for i := range rows {
-			cells[i] = style.Show(c.Quantity, c.Value(&rows[i]))
-			filled = filled || cells[i] != ""
+			v := c.Value(&rows[i])
+			cells[i] = style.Show(c.Quantity, v)
+			filled = filled || cells[i] != "" && (v.Number != 0 || !leftOutAtZero[c.Key])
 		}
 		if !filled && len(rows) > 0 {
 			continue

@@ -22,9 +22,9 @@ func Run(w io.Writer, r *analysis.Result, o Options) error {
 	p := &printer{w: w, markdown: o.Markdown, style: StyleOf(r)}
 	p.heading(report.Heading(r))
 	if o.Table == "" || o.Table == "pipes" {
-		pipeTables(p, r, &r.Design, "")
+		pipeTables(p, r, &r.Design, report.PipeGroups, "")
 		if r.Check != nil {
-			pipeTables(p, r, r.Check, fmt.Sprintf(", check storm of %g years", r.Check.Storm.ReturnPeriod))
+			pipeTables(p, r, r.Check, report.CheckGroups, fmt.Sprintf(", check storm of %g years", r.Check.Storm.ReturnPeriod))
 		}
 	}
 	if o.Table == "" || o.Table == "structures" {
@@ -42,12 +42,12 @@ func StyleOf(r *analysis.Result) report.Style {
 	return report.Style{Units: r.Job.Settings.Units, FlowUnit: r.Job.Settings.FlowUnit}
 }
 
-func pipeTables(p *printer, r *analysis.Result, storm *analysis.StormRun, suffix string) {
+func pipeTables(p *printer, r *analysis.Result, storm *analysis.StormRun, groups []report.Group, suffix string) {
 	rows := make([]report.PipeRow, len(r.Network.Pipes))
 	for i := range rows {
 		rows[i] = report.Pipe(r, storm, network.PipeIndex(i))
 	}
-	for _, g := range report.PipeGroups {
+	for _, g := range groups {
 		p.table(g.Title+suffix, makeGrid(p.style, report.Pick(report.PipeColumns, g.Keys), rows))
 	}
 }
