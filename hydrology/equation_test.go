@@ -1,7 +1,6 @@
 package hydrology
 
 import (
-	"encoding/csv"
 	"fmt"
 	"math"
 	"os"
@@ -23,16 +22,7 @@ func mustStorm(e Equation, period float64, unit IntensityUnit) EquationStorm {
 // malaysia reads the constants of one town: Urban Stormwater Management Manual for Malaysia (Department of
 // Irrigation and Drainage, 2000), Table 13.A1: ln i = a + b·ln t + c·ln²t + d·ln³t, mm/h, min, 30 < t < 1000.
 func malaysia(town string) Equation {
-	content, err := os.ReadFile("../testdata/hydrology/malaysia_1951-1990_cubic-in-ln-t.csv")
-	if err != nil {
-		panic(err)
-	}
-	reader := csv.NewReader(strings.NewReader(string(content)))
-	reader.Comment = '#'
-	rows, err := reader.ReadAll()
-	if err != nil {
-		panic(err)
-	}
+	rows := publishedRows("malaysia_1951-1990_cubic-in-ln-t.csv")
 	e := Equation{Unit: MillimetresPerHour, Shortest: 30, Longest: 1000, Source: "DID Malaysia 2000, Table 13.A1"}
 	for _, row := range rows[1:] {
 		if row[1] == town {
@@ -45,6 +35,15 @@ func malaysia(town string) Equation {
 		}
 	}
 	return e
+}
+
+// publishedRows reads a table of published values with its heading; the source stands in its first lines.
+func publishedRows(name string) [][]string {
+	content, err := os.ReadFile("../testdata/hydrology/" + name)
+	if err != nil {
+		panic(err)
+	}
+	return rowsOf(string(content))
 }
 
 func number(text string) float64 {
@@ -86,8 +85,9 @@ func ExampleEquation_logarithmOfPeriod() {
 	}}}}
 	q, _ := mustStorm(beijing, 1, LitresPerSecondHa).At(10)
 	i, _ := mustStorm(beijing, 1, MillimetresPerHour).At(10)
-	fmt.Printf("%.1f L/s/ha, %.1f mm/h\n", q, i)
-	// Output: 256.3 L/s/ha, 92.3 mm/h
+	rare, _ := mustStorm(beijing, 10, LitresPerSecondHa).At(10) // 1.811 times as much
+	fmt.Printf("%.1f L/s/ha, %.1f mm/h; in 10 years %.1f L/s/ha\n", q, i, rare)
+	// Output: 256.3 L/s/ha, 92.3 mm/h; in 10 years 464.2 L/s/ha
 }
 
 // ministryOfHealth1930: UK, Ministry of Health (1930), mm/h, min.

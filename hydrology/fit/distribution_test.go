@@ -170,6 +170,19 @@ func TestEveryMethodFitsTheCanadianMaxima(t *testing.T) {
 	}
 }
 
+// A sample that stands at Cunnane's plotting positions, (k − 0.4)/(n + 0.2), lies on the straight line; the largest
+// distance to its steps is that of the first and last point, 0.6/(n + 0.2).
+func TestGoodnessOfAPerfectSample(t *testing.T) {
+	f := Fitted{Distribution: Gumbel{10, 3}}
+	for k := range 20 {
+		f.Sample = append(f.Sample, Gumbel{10, 3}.Quantile((float64(k+1)-0.4)/20.2))
+	}
+	g := f.Goodness()
+	if math.Abs(g.Correlation-1) > 1e-12 || g.RootMeanSquare > 1e-12 || math.Abs(g.KolmogorovSmirnov-0.6/20.2) > 1e-12 {
+		t.Errorf("%+v", g)
+	}
+}
+
 func TestSamplesThatCannotBeFitted(t *testing.T) {
 	ten := []float64{1, 2, 3, 4, 5, 6, 7, 8, 9, 10}
 	with := func(x float64) []float64 { return append(slices.Clone(ten), x) }
