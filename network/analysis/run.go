@@ -118,7 +118,7 @@ func fullArea(c size.Candidate) float64 { return c.Section.At(c.Section.Rise()).
 func judge(r *Result, chooser *size.Chooser) []finding.Finding {
 	s := &r.Job.Settings
 	run := finding.Run{
-		Network: r.Network, Criteria: &s.Criteria, Storm: &r.Design.Storm, Units: s.Units, Flows: &r.Design.Flows,
+		Network: r.Network, Criteria: &s.Criteria, Storm: &r.Design.Storm, Units: s.Units, FlowUnit: s.FlowUnit, Flows: &r.Design.Flows,
 	}
 	if chooser != nil {
 		run.Remarks = chooser.Remarks()

@@ -30,6 +30,7 @@ type Run struct {
 	Criteria *network.Criteria
 	Storm    *network.Storm
 	Units    units.System
+	FlowUnit string // in messages: "cfs", "m3/s" or "L/s"
 	Flows    *sweep.Flows
 	Remarks  []size.Remark
 }
@@ -83,7 +84,9 @@ func (j *judge) id(s network.StructureIndex) string { return j.Network.Structure
 // The numbers of messages: enough digits to see the difference.
 func num(v float64, decimals int) string { return strconv.FormatFloat(v, 'f', decimals, 64) }
 
-func (j *judge) flow(v float64) string   { return num(v, j.decimals(2, 3)) + " " + j.Units.Flow }
+func (j *judge) flow(v float64) string {
+	return j.Units.ShowFlow(v, j.FlowUnit) + " " + units.FlowLabel(j.FlowUnit)
+}
 func (j *judge) speed(v float64) string  { return num(v, 2) + " " + j.Units.Velocity }
 func (j *judge) level(v float64) string  { return num(v, j.decimals(2, 3)) }
 func (j *judge) length(v float64) string { return num(v, j.decimals(2, 3)) + " " + j.Units.Length }

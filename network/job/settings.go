@@ -30,7 +30,6 @@ var (
 	structureLosses = []string{"access-hole", "coefficient", "none"}
 	outfallStarts   = []string{"midway", "critical"}
 	unitNames       = []string{"us", "si"}
-	flowUnits       = []string{"cfs", "m3/s", "L/s"}
 )
 
 // tableFiles gives every table of a job its file name.
@@ -143,7 +142,7 @@ var gradeWords = map[string]word{
 }
 
 var outputWords = map[string]word{
-	"flow": {flowUnits, func(s *Settings, i int) { s.FlowUnit = flowUnits[i] }},
+	"flow": {units.FlowUnits, func(s *Settings, i int) { s.FlowUnit = units.FlowUnits[i] }},
 }
 
 var stormSwitches = map[string]func(*Settings, bool){

@@ -60,12 +60,6 @@ type Style struct {
 	FlowUnit string // "cfs", "m3/s" or "L/s"
 }
 
-// litres and cubic metres to the cubic foot, 0.3048³ m³.
-const (
-	cubicMetresPerCubicFoot = 0.3048 * 0.3048 * 0.3048
-	litresPerCubicMetre     = 1000
-)
-
 // Unit is the label of a quantity; "" where it has none.
 func (s Style) Unit(q Quantity) string {
 	u := s.Units
@@ -79,10 +73,7 @@ func (s Style) Unit(q Quantity) string {
 	case Intensity:
 		return u.Intensity
 	case Flow:
-		if s.FlowUnit == "m3/s" {
-			return "m³/s"
-		}
-		return s.FlowUnit
+		return units.FlowLabel(s.FlowUnit)
 	case Velocity:
 		return u.Velocity
 	case Minutes:
@@ -107,7 +98,7 @@ func (s Style) Show(q Quantity, v Value) string {
 	case v.Text != "" || q == Text:
 		return v.Text
 	case q == Flow:
-		return fixed(s.flow(v.Number), map[string]int{"cfs": 2, "m3/s": 3, "L/s": 1}[s.FlowUnit])
+		return s.Units.ShowFlow(v.Number, s.FlowUnit)
 	case q == Size || q == Roughness:
 		return strconv.FormatFloat(round(v.Number, 6), 'f', -1, 64)
 	case q == Percent:
@@ -118,24 +109,6 @@ func (s Style) Show(q Quantity, v Value) string {
 		return fixed(v.Number, d[1])
 	}
 	return fixed(v.Number, d[0])
-}
-
-// flow turns a flow in the job's unit to the one that is shown.
-func (s Style) flow(v float64) float64 {
-	metric := s.Units.Name == units.SI.Name
-	switch s.FlowUnit {
-	case "cfs":
-		if metric {
-			return v / cubicMetresPerCubicFoot
-		}
-		return v
-	case "L/s":
-		v *= litresPerCubicMetre
-	}
-	if !metric {
-		v *= cubicMetresPerCubicFoot
-	}
-	return v
 }
 
 // fixed prints with a number of decimals and never as minus zero.
