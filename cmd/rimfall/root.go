@@ -63,7 +63,7 @@ code; a licensed engineer checks and signs.`,
 			return cmd.Help()
 		},
 	}
-	root.AddCommand(a.checkCommand(), a.sizeCommand(), a.scheduleCommand(), a.rulesCommand())
+	root.AddCommand(a.checkCommand(), a.sizeCommand(), a.scheduleCommand(), a.newCommand(), a.rulesCommand())
 	root.SetFlagErrorFunc(func(cmd *cobra.Command, err error) error {
 		return usageError{err.Error() + "; see `" + cmd.CommandPath() + " --help`"}
 	})

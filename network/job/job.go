@@ -79,6 +79,7 @@ func (r *reader) readTables(j *Job, rules []string) {
 		j.Rain = r.readRainfall(r.settings.Rainfall, text)
 		r.judgePeriods(j)
 	}
+	r.readAlong()
 	if r.has(r.settings.Files["departures"]) {
 		if t, ok := r.open("departures", "rule", "subject", "reason"); ok {
 			j.Departures = r.readDepartures(t, rules)

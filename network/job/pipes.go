@@ -45,10 +45,10 @@ var shapeWords = func() []string {
 // readPipes reads pipes.csv into the network.
 func (r *reader) readPipes(t *table) {
 	n := r.network
-	seen := newIDs(func(i int32) int32 { return n.Pipes[i].Line })
+	r.pipes = newIDs(func(i int32) int32 { return n.Pipes[i].Line })
 	eachRow(t, func(row *pipeRow) {
 		p := network.Pipe{Line: int32(t.line), Note: note(row.Note)}
-		p.ID = seen.add(t, row.ID, len(n.Pipes))
+		p.ID = r.pipes.add(t, row.ID, len(n.Pipes))
 		p.From = r.structure(t, "from", row.From)
 		p.To = r.structure(t, "to", row.To)
 		if from := strings.TrimSpace(row.From); from != "" && from == strings.TrimSpace(row.To) {

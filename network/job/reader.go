@@ -26,6 +26,7 @@ type reader struct {
 	catalog    catalog.Catalog
 	sections   map[sectionKey]Made
 	structures ids
+	pipes      ids
 	surfaces   surfaces
 }
 

@@ -41,6 +41,8 @@ var tableFiles = map[string]string{
 	"departures": "departures.csv",
 	"surfaces":   "surfaces.csv",
 	"catalog":    "catalog.csv",
+	"ground":     "ground.csv",
+	"crossings":  "crossings.csv",
 }
 
 // defaults are the settings of an empty job.toml in a system of units.
@@ -68,11 +70,13 @@ func defaults(u units.System) Settings {
 		c.MinCover, c.LeastFall, c.MinRise = network.Some(0.3), 0.03, 0.3
 		c.MinVelocity, c.MaxVelocity, c.Freeboard = 0.9, 4.5, 0.3
 		c.MaxRationalArea = network.Some(80)
+		c.MinClearance = network.Some(0.45)
 	} else {
 		s.FlowUnit = "cfs"
 		c.MinCover, c.LeastFall, c.MinRise = network.Some(1), 0.1, 1
 		c.MinVelocity, c.MaxVelocity, c.Freeboard = 3, 15, 1
 		c.MaxRationalArea = network.Some(200)
+		c.MinClearance = network.Some(1.5)
 	}
 	return s
 }
@@ -105,6 +109,7 @@ var criteriaNumbers = map[string]number{
 
 	"max_drop":            {func(s *Settings, v float64) { s.Criteria.MaxDrop = network.Some(v) }, 0, huge, true, "a height over 0"},
 	"max_spacing":         {func(s *Settings, v float64) { s.Criteria.MaxSpacing = network.Some(v) }, 0, huge, true, "a length over 0"},
+	"min_clearance":       {func(s *Settings, v float64) { s.Criteria.MinClearance = network.Some(v) }, 0, huge, false, "a height, 0 or more"},
 	"max_outlet_velocity": {func(s *Settings, v float64) { s.Criteria.MaxOutletVelocity = network.Some(v) }, 0, huge, true, "a velocity over 0"},
 	"max_rational_area":   {func(s *Settings, v float64) { s.Criteria.MaxRationalArea = network.Some(v) }, 0, huge, true, "an area over 0"},
 }

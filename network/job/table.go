@@ -24,6 +24,8 @@ var tableFields = map[string][]string{
 	"departures": csvFields[departureRow](),
 	"surfaces":   csvFields[surfaceRow](),
 	"rainfall":   {"duration"},
+	"ground":     csvFields[groundRow](),
+	"crossings":  csvFields[crossingRow](),
 }
 
 func csvFields[R any]() []string {

@@ -1,6 +1,7 @@
 package job
 
 import (
+	"maps"
 	"slices"
 	"strings"
 
@@ -87,6 +88,19 @@ func (d *ids) add(t *table, text string, i int) string {
 	return text
 }
 
+// nearest words the known id that is closest to one that is not known; it looks at
+// no more than a few thousand, since a file with a wrong column names an unknown
+// structure in every row.
+func (d *ids) nearest(text string) string {
+	if len(d.index) > 5000 {
+		return ""
+	}
+	if near, ok := fault.Nearest(text, slices.Sorted(maps.Keys(d.index))); ok {
+		return "; did you mean \"" + near + "\"?"
+	}
+	return ""
+}
+
 // structure looks up the structure that a cell names.
 func (r *reader) structure(t *table, field, text string) network.StructureIndex {
 	text = strings.TrimSpace(text)
@@ -100,23 +114,6 @@ func (r *reader) structure(t *table, field, text string) network.StructureIndex 
 		t.faultAt(field, "%s is blank: name a structure", field)
 		return -1
 	}
-	t.faultAt(field, "unknown structure %q%s", text, r.nearestStructure(text))
+	t.faultAt(field, "unknown structure %q%s", text, r.structures.nearest(text))
 	return -1
-}
-
-// nearestStructure suggests an id; it looks at no more than a few thousand, since
-// a file with a wrong column names an unknown structure in every row.
-func (r *reader) nearestStructure(text string) string {
-	if len(r.structures.index) > 5000 {
-		return ""
-	}
-	known := make([]string, 0, len(r.structures.index))
-	for id := range r.structures.index {
-		known = append(known, id)
-	}
-	slices.Sort(known)
-	if near, ok := fault.Nearest(text, known); ok {
-		return "; did you mean \"" + near + "\"?"
-	}
-	return ""
 }
