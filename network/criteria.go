@@ -20,6 +20,7 @@ type Criteria struct {
 	Freeboard          float64
 	N                  float64 // for a pipe with neither n nor material
 
+	MinClearance      Maybe // upright gap to a crossing service
 	MaxDrop           Maybe // fall through a structure above which a drop structure is called for
 	MaxSpacing        Maybe // length of a pipe between structures
 	MaxOutletVelocity Maybe // at an outfall without protection

@@ -123,6 +123,8 @@ type Network struct {
 	Structures []Structure
 	Pipes      []Pipe
 	Areas      []Area
+	Ground     []GroundPoint // between structures, in the order of SortGround
+	Crossings  []Crossing
 
 	out, in adjacency[PipeIndex]
 	here    adjacency[AreaIndex]

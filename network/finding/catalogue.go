@@ -62,6 +62,18 @@ var rules = []Rule{
 		Error, "min_cover, max_cover", "least 1 to 3 ft by agency: Missouri DOT EPG 750.4; Lawrenceburg IN code 155.036",
 	},
 	{
+		"cover-along-pipe", "too little or too much cover between structures",
+		"the height between a level of ground.csv and the outside of the pipe below it is under the least or over the greatest; the worst place of each pipe is named",
+		"covers at the two ends say nothing of a ditch or a fill between them",
+		Error, "min_cover, max_cover, ground.csv", common,
+	},
+	{
+		"crossing-clearance", "too close to a crossing service",
+		"the upright gap between the outsides of the pipe and of a service of crossings.csv is under the least; negative where they meet",
+		"a leak reaches a water main, and the load of the upper pipe passes to the lower one",
+		Error, "min_clearance, crossings.csv", "18 in from water mains: Tolono IL code",
+	},
+	{
 		"min-size", "smaller than the least size",
 		"the rise is under the least that the criteria allow",
 		"small pipes clog and cannot be inspected",

@@ -41,7 +41,7 @@ func Judge(r Run) []Finding {
 	j := &judge{Run: r}
 	for _, rule := range []func(){
 		j.capacity, j.depthRatio, j.noSizeCarries, j.adverseSlope, j.slope, j.cleansingVelocity, j.cleansingShear,
-		j.highVelocity, j.cover, j.minSize, j.sizeDecrease, j.invertOrder, j.leastFall, j.sizeChange,
+		j.highVelocity, j.cover, j.coverAlongPipe, j.crossingClearance, j.minSize, j.sizeDecrease, j.invertOrder, j.leastFall, j.sizeChange,
 		j.lowestInvert, j.boundsCross, j.dropStructure, j.longPipe, j.outletVelocity, j.flowFalls, j.rationalArea,
 		j.belowFirstDuration, j.timeAssumed, j.rimUnknown, j.levelsUnknown, j.wallUnknown, j.noFlow, j.unusedOutfall,
 	} {
