@@ -40,6 +40,9 @@ func (g Graph) Node(id int64) graph.Node {
 
 // Nodes iterates over all structures in file order.
 func (g Graph) Nodes() graph.Nodes {
+	if len(g.n.Structures) == 0 {
+		return graph.Empty
+	}
 	return &walk{count: len(g.n.Structures), at: func(i int) node { return node(i) }, current: -1}
 }
 
