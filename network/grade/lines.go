@@ -37,6 +37,7 @@ type Pipe struct {
 	Deflection   float64 // degrees from straight on into the pipe out that governs, 0 to 180
 	AngleAssumed bool    // Deflection is neither given nor known from coordinates
 
+	full    bool    // full at the upper end
 	control float64 // height of the water below the pipe over its lower invert
 }
 
@@ -76,6 +77,9 @@ type Structure struct {
 	Level float64           // of the water in the structure: hydraulic and energy grade line alike
 	Out   network.PipeIndex // the pipe out that sets the level; -1 at an outfall
 	Parts Parts             // of the loss from there to the energy in the upper end of that pipe
+
+	plunge  float64 // level over which a pipe in plunges
+	counted float64 // part of the velocity head of a pipe in that makes up the level with its depth
 }
 
 // Freeboard is the rim less the level; none where the rim or the level is not known. It is negative where the line stands
@@ -97,31 +101,9 @@ type Parts struct {
 	Held        float64 // what keeps the level from sinking under the energy of the pipe out
 	Coefficient float64 // a coefficient on the velocity head of the pipe out
 	Junction    float64 // momentum at a blind junction
-	Surplus     float64 // another pipe out holds the level higher
 }
 
 // Sum is the whole fall.
 func (p Parts) Sum() float64 {
-	return p.Entrance + p.Benching + p.Angle + p.Plunging + p.Held + p.Coefficient + p.Junction + p.Surplus
-}
-
-// Up draws the lines of a connected network without cycles for the flows of one storm.
-func Up(n *network.Network, s Settings, flows *sweep.Flows, tailwater Tailwater) *Lines {
-	return &Lines{
-		Pipes: make([]Pipe, len(n.Pipes)), Structures: make([]Structure, len(n.Structures)),
-		network: n, flows: flows, settings: s,
-	}
-}
-
-// Point is a place on the lines along a pipe.
-type Point struct {
-	Distance float64 // from the lower end
-	Depth    float64 // of the water over the invert there, over the rise under pressure
-	HGL, EGL float64
-}
-
-// Trace lists the lines along a pipe from its lower end up: both ends, the places that cut it into equal parts, where the
-// surface meets the crown, and at a jump both depths. There is nothing where the lines are not known.
-func (l *Lines) Trace(p network.PipeIndex, parts int) []Point {
-	return nil
+	return p.Entrance + p.Benching + p.Angle + p.Plunging + p.Held + p.Coefficient + p.Junction
 }
