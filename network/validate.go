@@ -75,7 +75,7 @@ func (n *Network) shareProblems() []Problem {
 		if !missing && math.Abs(sum-1) > shareTolerance {
 			first := &n.Pipes[out[0]]
 			all = append(all, Problem{"pipes", int(first.Line), "share",
-				fmt.Sprintf("the shares of the pipes out of structure %s add up to %g; they must add up to 1", n.Structures[i].ID, sum)})
+				fmt.Sprintf("the shares of the pipes out of structure %s add up to %.7g; they must add up to 1", n.Structures[i].ID, sum)})
 		}
 	}
 	return all

@@ -20,16 +20,35 @@ func (r *reader) judgeNetwork(j *Job, purpose Purpose) {
 	}
 	whole := r.dropLoose()
 	n.Connect()
-	problems := n.Validate()
-	for _, p := range problems {
+	told := r.places()
+	for _, p := range n.Validate() {
 		if p.Table == "structures" && p.Line > 0 && !whole {
 			continue // a pipe that is left out may be the way to the outfall
 		}
-		r.faults = append(r.faults, j.Locate(p))
+		f := j.Locate(p)
+		if f.Line > 0 && told[filePlace{f.File, place{f.Line, f.Column}}] {
+			continue // a row whose name is a fault is joined to nothing because of that
+		}
+		r.faults = append(r.faults, f)
 	}
 	if purpose == ToSize {
 		r.judgeHeads(j)
 	}
+}
+
+// filePlace is a place in one of the files.
+type filePlace struct {
+	file string
+	place
+}
+
+// places are those at which a fault was found so far.
+func (r *reader) places() map[filePlace]bool {
+	at := map[filePlace]bool{}
+	for _, f := range r.faults {
+		at[filePlace{f.File, place{f.Line, f.Column}}] = true
+	}
+	return at
 }
 
 // dropLoose leaves out pipes and areas at unknown structures; whole tells that

@@ -70,7 +70,7 @@ type ids struct {
 	line  func(i int32) int32
 }
 
-func newIDs(line func(int32) int32) ids { return ids{map[string]int32{}, line} }
+func newIDs(rows int, line func(int32) int32) ids { return ids{make(map[string]int32, rows), line} }
 
 // add judges the id of a new row, whose index is i. The text is copied.
 func (d *ids) add(t *table, text string, i int) string {
@@ -107,8 +107,8 @@ func (r *reader) structure(t *table, field, text string) network.StructureIndex 
 	if i, ok := r.structures.index[text]; ok {
 		return network.StructureIndex(i)
 	}
-	if r.structures.index == nil {
-		return -1 // the table of structures could not be read, which is a fault already
+	if len(r.structures.index) == 0 {
+		return -1 // the table of structures could not be read or is empty, which is a fault already
 	}
 	if text == "" {
 		t.faultAt(field, "%s is blank: name a structure", field)
