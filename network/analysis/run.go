@@ -7,6 +7,7 @@ import (
 	"rimfall/network"
 	"rimfall/network/fault"
 	"rimfall/network/finding"
+	"rimfall/network/grade"
 	"rimfall/network/job"
 	"rimfall/network/size"
 	"rimfall/network/sweep"
@@ -33,6 +34,7 @@ type Result struct {
 type StormRun struct {
 	Storm network.Storm
 	Flows sweep.Flows
+	Lines *grade.Lines
 }
 
 // Read reads a job folder for a run with the given options.
@@ -64,6 +66,7 @@ func Run(j *job.Job, o Options) (*Result, error) {
 		return nil, err
 	}
 	r.Design = design
+	r.Design.Lines = grade.Up(r.Network, gradeSettings(j), &r.Design.Flows, grade.DesignTailwater)
 	if check := storm.CheckPeriod; check.OK {
 		storm.ReturnPeriod = check.V
 		run, err := runStorm(j, r.Network, storm, nil)
@@ -71,6 +74,7 @@ func Run(j *job.Job, o Options) (*Result, error) {
 			return nil, err
 		}
 		r.Check = &run
+		r.Check.Lines = grade.Up(r.Network, gradeSettings(j), &r.Check.Flows, grade.CheckTailwater)
 	}
 	r.Findings = judge(r, chooser)
 	return r, nil
@@ -87,7 +91,7 @@ func runStorm(j *job.Job, n *network.Network, storm network.Storm, choose sweep.
 	for _, p := range problems {
 		faults = append(faults, j.Locate(p))
 	}
-	return StormRun{storm, flows}, faults.Err()
+	return StormRun{Storm: storm, Flows: flows}, faults.Err()
 }
 
 // Candidates lists the sizes of a job's catalogue by shape and material,

@@ -35,7 +35,14 @@ var PipeColumns = []Column[PipeRow]{
 	{"travel_time", []string{"time", "in pipe"}, Minutes, func(r *PipeRow) Value { return N(r.Run.TravelTime) }},
 	{"cover_upper", []string{"cover,", "upper end"}, Length, func(r *PipeRow) Value { return M(r.CoverUpper) }},
 	{"cover_lower", []string{"cover,", "lower end"}, Length, func(r *PipeRow) Value { return M(r.CoverLower) }},
-	{"regime", []string{"runs"}, Text, func(r *PipeRow) Value { return T(Regime(r.Run)) }},
+	{"hgl_upper", []string{"grade line,", "upper end"}, Level, func(r *PipeRow) Value { return line(r, r.Line.HGLUpper) }},
+	{"hgl_lower", []string{"grade line,", "lower end"}, Level, func(r *PipeRow) Value { return line(r, r.Line.HGLLower) }},
+	{"egl_upper", []string{"energy line,", "upper end"}, Level, func(r *PipeRow) Value { return line(r, r.Line.EGLUpper) }},
+	{"egl_lower", []string{"energy line,", "lower end"}, Level, func(r *PipeRow) Value { return line(r, r.Line.EGLLower) }},
+	{"regime", []string{"runs"}, Text, func(r *PipeRow) Value { return T(r.Line.Regime.String()) }},
+	{"jump", []string{"jump, from", "lower end"}, Length, func(r *PipeRow) Value { return M(r.Line.Jump) }},
+	{"full_length", []string{"length", "flowing full"}, Length, func(r *PipeRow) Value { return line(r, r.Line.FullLength) }},
+	{"bend_loss", []string{"bend", "loss"}, Length, func(r *PipeRow) Value { return Value{Number: r.Line.Bend, OK: r.Line.Bend > 0} }},
 }
 
 // PipeGroups are the tables into which the columns of a pipe are split for
@@ -43,7 +50,8 @@ var PipeColumns = []Column[PipeRow]{
 var PipeGroups = []Group{
 	{"Flow in the pipes", []string{"id", "from", "to", "area", "ca", "ca_counted", "time", "intensity", "inflow", "flow", "travel_time"}},
 	{"Section and uniform flow", []string{"id", "size", "n", "slope", "flow", "capacity", "capacity_ratio", "depth", "depth_ratio", "velocity", "velocity_full"}},
-	{"Critical state and levels", []string{"id", "critical_depth", "froude", "regime", "length", "invert_upper", "invert_lower", "cover_upper", "cover_lower"}},
+	{"Critical state and levels", []string{"id", "critical_depth", "froude", "length", "invert_upper", "invert_lower", "cover_upper", "cover_lower"}},
+	{"Grade lines in the pipes", []string{"id", "hgl_upper", "hgl_lower", "egl_upper", "egl_lower", "regime", "full_length", "jump"}},
 }
 
 // CheckGroups are the tables of the check storm: what it changes.

@@ -5,6 +5,7 @@ import (
 
 	"rimfall/network"
 	"rimfall/network/analysis"
+	"rimfall/network/grade"
 	"rimfall/network/sweep"
 )
 
@@ -12,6 +13,7 @@ import (
 type PipeRow struct {
 	Pipe     *network.Pipe
 	Run      *sweep.Pipe
+	Line     *grade.Pipe
 	Partial  bool // the peak is by partial area
 	From, To string
 
@@ -26,7 +28,7 @@ type PipeRow struct {
 func Pipe(r *analysis.Result, storm *analysis.StormRun, i network.PipeIndex) PipeRow {
 	p, run := &r.Network.Pipes[i], &storm.Flows.Pipes[i]
 	row := PipeRow{
-		Pipe: p, Run: run, Size: SizeValue(p), Partial: storm.Storm.Peak == network.PartialArea,
+		Pipe: p, Run: run, Line: &storm.Lines.Pipes[i], Size: SizeValue(p), Partial: storm.Storm.Peak == network.PartialArea,
 		From: r.Network.Structures[p.From].ID, To: r.Network.Structures[p.To].ID,
 		CoverUpper: r.Network.Cover(p, network.Upper), CoverLower: r.Network.Cover(p, network.Lower),
 	}
@@ -55,10 +57,8 @@ func SizeText(p *network.Pipe) string {
 	return exact(p.Size.Span) + "x" + exact(p.Size.Rise)
 }
 
-// Regime is how the pipe runs at its design flow, in one plain word.
-func Regime(run *sweep.Pipe) string { return regimes[run.State] }
-
-var regimes = [...]string{sweep.Dry: "dry", sweep.PartFull: "part-full", sweep.Full: "full"}
+// line gives a level of the grade lines where they are known.
+func line(r *PipeRow, v float64) Value { return Value{Number: v, OK: r.Line.Known} }
 
 // running gives a value only where water flows.
 func running(r *PipeRow, v float64) Value { return Value{Number: v, OK: r.Run.State != sweep.Dry} }

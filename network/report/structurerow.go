@@ -3,6 +3,7 @@ package report
 import (
 	"rimfall/network"
 	"rimfall/network/analysis"
+	"rimfall/network/grade"
 	"rimfall/network/sweep"
 )
 
@@ -10,13 +11,14 @@ import (
 type StructureRow struct {
 	Structure *network.Structure
 	Run       *sweep.Structure
+	Line      *grade.Structure
 	LowestOut network.Maybe // the lowest invert of the pipes that leave
 	LowestIn  network.Maybe
 }
 
 // Structure makes the row of structure s in a storm of a run.
 func Structure(r *analysis.Result, storm *analysis.StormRun, s network.StructureIndex) StructureRow {
-	row := StructureRow{Structure: &r.Network.Structures[s], Run: &storm.Flows.Structures[s]}
+	row := StructureRow{Structure: &r.Network.Structures[s], Run: &storm.Flows.Structures[s], Line: &storm.Lines.Structures[s]}
 	if _, v, ok := r.Network.LowestIn(s); ok {
 		row.LowestIn = network.Some(v)
 	}
@@ -48,6 +50,12 @@ func (r *StructureRow) Height() network.Maybe {
 	return network.Maybe{}
 }
 
+// level is the grade line at the structure, the energy line alike.
+func (r *StructureRow) level() Value { return Value{Number: r.Line.Level, OK: r.Line.Known} }
+
+// part is a part of the loss at the structure, where there is one.
+func (r *StructureRow) part(v float64) Value { return Value{Number: v, OK: r.Line.Known && v != 0} }
+
 // StructureColumns are the columns of the table of structures.
 var StructureColumns = []Column[StructureRow]{
 	{"id", []string{"structure"}, Text, func(r *StructureRow) Value { return T(r.Structure.ID) }},
@@ -60,9 +68,20 @@ var StructureColumns = []Column[StructureRow]{
 	{"lowest_invert_in", []string{"lowest", "invert in"}, Level, func(r *StructureRow) Value { return M(r.LowestIn) }},
 	{"lowest_invert_out", []string{"lowest", "invert out"}, Level, func(r *StructureRow) Value { return M(r.LowestOut) }},
 	{"height", []string{"height,", "invert to rim"}, Length, func(r *StructureRow) Value { return M(r.Height()) }},
+	{"hgl", []string{"grade", "line"}, Level, func(r *StructureRow) Value { return r.level() }},
+	{"egl", nil, Level, func(r *StructureRow) Value { return r.level() }},
+	{"freeboard", []string{"freeboard"}, Length, func(r *StructureRow) Value { return M(r.Line.Freeboard(r.Structure)) }},
+	{"loss_entrance", []string{"entrance"}, Length, func(r *StructureRow) Value { return r.part(r.Line.Parts.Entrance) }},
+	{"loss_benching", []string{"benching"}, Length, func(r *StructureRow) Value { return r.part(r.Line.Parts.Benching) }},
+	{"loss_angle", []string{"angle"}, Length, func(r *StructureRow) Value { return r.part(r.Line.Parts.Angle) }},
+	{"loss_plunging", []string{"plunging"}, Length, func(r *StructureRow) Value { return r.part(r.Line.Parts.Plunging) }},
+	{"loss_held", []string{"held", "up by"}, Length, func(r *StructureRow) Value { return r.part(r.Line.Parts.Held) }},
+	{"loss_coefficient", []string{"coeffi-", "cient"}, Length, func(r *StructureRow) Value { return r.part(r.Line.Parts.Coefficient) }},
+	{"loss_junction", []string{"junction"}, Length, func(r *StructureRow) Value { return r.part(r.Line.Parts.Junction) }},
 }
 
 // StructureGroups are the tables of structures for people.
 var StructureGroups = []Group{
 	{"Structures", []string{"id", "kind", "rim", "area", "ca", "time", "flow", "lowest_invert_in", "lowest_invert_out", "height"}},
+	{"Grade line and losses at the structures", []string{"id", "rim", "hgl", "freeboard", "loss_entrance", "loss_benching", "loss_angle", "loss_plunging", "loss_held", "loss_coefficient", "loss_junction"}},
 }
