@@ -43,8 +43,10 @@ func (n *Network) outfallProblems() []Problem {
 		}
 		outfalls++
 		for _, p := range n.PipesOut(StructureIndex(i)) {
-			all = append(all, Problem{"pipes", int(n.Pipes[p].Line), "from",
-				fmt.Sprintf("pipe %s leaves the outfall %s; an outfall is where the water leaves the network: turn the pipe round, or make %s a manhole", n.Pipes[p].ID, s.ID, s.ID)})
+			all = append(all, Problem{
+				"pipes", int(n.Pipes[p].Line), "from",
+				fmt.Sprintf("pipe %s leaves the outfall %s; an outfall is where the water leaves the network: turn the pipe round, or make %s a manhole", n.Pipes[p].ID, s.ID, s.ID),
+			})
 		}
 	}
 	if outfalls == 0 && len(n.Structures) > 0 {
@@ -67,15 +69,19 @@ func (n *Network) shareProblems() []Problem {
 			pipe := &n.Pipes[p]
 			if !pipe.Share.OK && len(out) > 1 {
 				missing = true
-				all = append(all, Problem{"pipes", int(pipe.Line), "share",
-					fmt.Sprintf("structure %s has %d pipes out, so pipe %s needs a share of its flow (0 to 1; the shares add up to 1)", n.Structures[i].ID, len(out), pipe.ID)})
+				all = append(all, Problem{
+					"pipes", int(pipe.Line), "share",
+					fmt.Sprintf("structure %s has %d pipes out, so pipe %s needs a share of its flow (0 to 1; the shares add up to 1)", n.Structures[i].ID, len(out), pipe.ID),
+				})
 			}
 			sum += pipe.Share.Or(1)
 		}
 		if !missing && math.Abs(sum-1) > shareTolerance {
 			first := &n.Pipes[out[0]]
-			all = append(all, Problem{"pipes", int(first.Line), "share",
-				fmt.Sprintf("the shares of the pipes out of structure %s add up to %.7g; they must add up to 1", n.Structures[i].ID, sum)})
+			all = append(all, Problem{
+				"pipes", int(first.Line), "share",
+				fmt.Sprintf("the shares of the pipes out of structure %s add up to %.7g; they must add up to 1", n.Structures[i].ID, sum),
+			})
 		}
 	}
 	return all
@@ -84,8 +90,10 @@ func (n *Network) shareProblems() []Problem {
 func (n *Network) cycleProblem(cycle []PipeIndex) Problem {
 	first := &n.Pipes[cycle[0]]
 	if len(cycle) == 1 {
-		return Problem{"pipes", int(first.Line), "to",
-			fmt.Sprintf("pipe %s starts and ends at structure %s", first.ID, n.Structures[first.From].ID)}
+		return Problem{
+			"pipes", int(first.Line), "to",
+			fmt.Sprintf("pipe %s starts and ends at structure %s", first.ID, n.Structures[first.From].ID),
+		}
 	}
 	const shown = 40
 	var b strings.Builder
@@ -114,8 +122,10 @@ func (n *Network) deadEnds() []Problem {
 		if len(n.PipesIn(StructureIndex(i))) == 0 {
 			what = "no pipe joins it to the network"
 		}
-		all = append(all, Problem{"structures", int(s.Line), "id",
-			fmt.Sprintf("structure %s has no way to an outfall: %s, and its kind is %s", s.ID, what, s.Kind)})
+		all = append(all, Problem{
+			"structures", int(s.Line), "id",
+			fmt.Sprintf("structure %s has no way to an outfall: %s, and its kind is %s", s.ID, what, s.Kind),
+		})
 	}
 	return all
 }
