@@ -5,6 +5,7 @@ import (
 	"io"
 	"os"
 	"path/filepath"
+	"runtime/debug"
 	"strings"
 
 	"github.com/spf13/cobra"
@@ -27,8 +28,15 @@ type app struct {
 	broken   bool // --strict found something
 }
 
+// gcPercent lets the memory grow more than Go's default before it is searched for
+// waste: what a run makes, it mostly keeps to its end. A million pipes stay under 1.5 GB.
+const gcPercent = 300
+
 // run runs the program with its arguments and streams and returns the exit status.
 func run(args []string, in io.Reader, out, err io.Writer) int {
+	if os.Getenv("GOGC") == "" {
+		debug.SetGCPercent(gcPercent)
+	}
 	a := &app{in: in, out: out, err: err}
 	root := a.root()
 	root.SetArgs(args)

@@ -1,11 +1,14 @@
 package finding
 
 import (
+	"cmp"
 	"fmt"
 	"math"
+	"slices"
 	"strconv"
 
 	"rimfall/network"
+	"rimfall/network/grade"
 	"rimfall/network/size"
 	"rimfall/network/sweep"
 	"rimfall/network/units"
@@ -33,6 +36,11 @@ type Run struct {
 	FlowUnit string // in messages: "cfs", "m3/s" or "L/s"
 	Flows    *sweep.Flows
 	Remarks  []size.Remark
+
+	Lines   *grade.Lines // of this storm; nil: the grade lines are not judged
+	Check   *StormLines  // the check storm's, where there is one
+	Growth  []Growth     // pipes enlarged for the freeboard
+	Uncured map[network.StructureIndex]bool
 }
 
 // Judge applies every rule. Findings come in the order of the catalogue, and
@@ -40,20 +48,29 @@ type Run struct {
 func Judge(r Run) []Finding {
 	j := &judge{Run: r}
 	for _, rule := range []func(){
-		j.capacity, j.depthRatio, j.noSizeCarries, j.adverseSlope, j.slope, j.cleansingVelocity, j.cleansingShear,
+		j.capacity, j.surcharge, j.flooding, j.freeboard, j.depthRatio, j.noSizeCarries, j.gradeLineSize, j.adverseSlope, j.slope, j.cleansingVelocity, j.cleansingShear,
 		j.highVelocity, j.cover, j.coverAlongPipe, j.crossingClearance, j.minSize, j.sizeDecrease, j.invertOrder, j.leastFall, j.sizeChange,
-		j.lowestInvert, j.boundsCross, j.dropStructure, j.longPipe, j.outletVelocity, j.flowFalls, j.rationalArea,
+		j.lowestInvert, j.boundsCross, j.dropStructure, j.longPipe, j.outletVelocity,
+		j.drownedOutfall, j.fastBend, j.angleAssumed, j.jump, j.lowTailwater, j.lineUnknown, j.flowFalls, j.rationalArea,
 		j.belowFirstDuration, j.timeAssumed, j.rimUnknown, j.levelsUnknown, j.wallUnknown, j.noFlow, j.unusedOutfall,
 	} {
 		rule()
 	}
+	for i := range j.Network.Pipes { // one way through memory for all rules
+		for _, rule := range j.pipeRules {
+			rule(&j.Network.Pipes[i], &j.Flows.Pipes[i])
+		}
+	}
+	at := places()
+	slices.SortStableFunc(j.found, func(a, b Finding) int { return cmp.Compare(at[a.Rule], at[b.Rule]) })
 	return j.found
 }
 
 // judge collects findings.
 type judge struct {
 	Run
-	found []Finding
+	found     []Finding
+	pipeRules []func(p *network.Pipe, run *sweep.Pipe)
 }
 
 // Room for the arithmetic when a value is held against its limit: levels are
@@ -72,11 +89,9 @@ func (j *judge) add(name, subject string, value, limit network.Maybe, format str
 	j.found = append(j.found, Finding{rule(name), subject, value, limit, fmt.Sprintf(format, args...), j.Storm.ReturnPeriod, ""})
 }
 
-// eachPipe calls a rule for every pipe with its results.
+// eachPipe has a rule called for every pipe with its results.
 func (j *judge) eachPipe(rule func(p *network.Pipe, run *sweep.Pipe)) {
-	for i := range j.Network.Pipes {
-		rule(&j.Network.Pipes[i], &j.Flows.Pipes[i])
-	}
+	j.pipeRules = append(j.pipeRules, rule)
 }
 
 func (j *judge) id(s network.StructureIndex) string { return j.Network.Structures[s].ID }

@@ -46,3 +46,12 @@ func rule(name string) *Rule {
 	}
 	panic("no rule " + name)
 }
+
+// places gives every rule its place in the catalogue.
+func places() map[*Rule]int {
+	at := make(map[*Rule]int, len(rules))
+	for i := range rules {
+		at[&rules[i]] = i
+	}
+	return at
+}

@@ -20,7 +20,9 @@ type areaRow struct {
 // readAreas reads areas.csv into the network.
 func (r *reader) readAreas(t *table) {
 	n := r.network
-	seen := newIDs(func(i int32) int32 { return n.Areas[i].Line })
+	rows := t.rowsAtMost()
+	n.Areas = make([]network.Area, 0, rows)
+	seen := newIDs(rows, func(i int32) (string, int32) { return n.Areas[i].ID, n.Areas[i].Line })
 	eachRow(t, func(row *areaRow) {
 		a := network.Area{Line: int32(t.line), Note: note(row.Note)}
 		a.ID = seen.add(t, row.ID, len(n.Areas))

@@ -59,7 +59,7 @@ func (r *reader) readGround(t *table) {
 // there is none.
 func (r *reader) pipe(t *table, text string) (p network.PipeIndex, ok bool) {
 	text = strings.TrimSpace(text)
-	if i, found := r.pipes.index[text]; found {
+	if i, found := r.pipes.find(text); found {
 		return network.PipeIndex(i), true
 	}
 	switch {

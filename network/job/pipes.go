@@ -45,7 +45,9 @@ var shapeWords = func() []string {
 // readPipes reads pipes.csv into the network.
 func (r *reader) readPipes(t *table) {
 	n := r.network
-	r.pipes = newIDs(func(i int32) int32 { return n.Pipes[i].Line })
+	rows := t.rowsAtMost()
+	n.Pipes = make([]network.Pipe, 0, rows)
+	r.pipes = newIDs(rows, func(i int32) (string, int32) { return n.Pipes[i].ID, n.Pipes[i].Line })
 	eachRow(t, func(row *pipeRow) {
 		p := network.Pipe{Line: int32(t.line), Note: note(row.Note)}
 		p.ID = r.pipes.add(t, row.ID, len(n.Pipes))

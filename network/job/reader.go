@@ -25,6 +25,8 @@ type reader struct {
 	network    *network.Network
 	catalog    catalog.Catalog
 	sections   map[sectionKey]Made
+	lastKey    sectionKey // the section made or found last
+	lastMade   Made
 	structures ids
 	pipes      ids
 	surfaces   surfaces

@@ -66,11 +66,15 @@ func materialWord(material string) string {
 
 // section makes a section once for all pipes that share it.
 func (r *reader) section(key sectionKey) Made {
-	if m, ok := r.sections[key]; ok {
-		return m
+	if key == r.lastKey { // most pipes are like the one before
+		return r.lastMade
 	}
-	m := MakeSection(r.catalog, r.settings.Units.Name, r.settings.Units.SizeFactor, key.shape, key.material, key.size)
-	r.sections[key] = m
+	m, ok := r.sections[key]
+	if !ok {
+		m = MakeSection(r.catalog, r.settings.Units.Name, r.settings.Units.SizeFactor, key.shape, key.material, key.size)
+		r.sections[key] = m
+	}
+	r.lastKey, r.lastMade = key, m
 	return m
 }
 

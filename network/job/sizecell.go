@@ -18,9 +18,11 @@ var sizeUnits = map[string]float64{
 // parseSize reads a size cell, a diameter or `span x rise`, each with a unit if
 // another than the job's is meant. why says what would be right where ok is false.
 func parseSize(text, shape string, comma bool, u units.System) (size network.Size, why string) {
-	fold := strings.NewReplacer("×", "x", "X", "x", "*", "x", " ", "").Replace(strings.ToLower(text))
-	parts := strings.Split(fold, "x")
 	round := shape == string(catalog.Circle)
+	if v, ok := parseNumber(text, comma); ok && round && v > 0 { // nearly every pipe of a large job
+		return network.Size{Span: v, Rise: v}, ""
+	}
+	parts := strings.Split(foldSize.Replace(strings.ToLower(text)), "x")
 	switch {
 	case round && len(parts) != 1:
 		return size, "a circle has one size, its diameter; for span x rise name the shape"
@@ -47,6 +49,9 @@ func parseSize(text, shape string, comma bool, u units.System) (size network.Siz
 	size = network.Size{Span: lengths[0], Rise: lengths[1]}
 	return size, sizeOddity(size, shape, named, u)
 }
+
+// foldSize writes every way of saying "by" as x, without blanks.
+var foldSize = strings.NewReplacer("×", "x", "*", "x", " ", "")
 
 // withUnitOf gives a length without a unit the unit of another.
 func withUnitOf(bare, other string) string {

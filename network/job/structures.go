@@ -26,7 +26,9 @@ type structureRow struct {
 // readStructures reads structures.csv into the network.
 func (r *reader) readStructures(t *table) {
 	n := r.network
-	r.structures = newIDs(func(i int32) int32 { return n.Structures[i].Line })
+	rows := t.rowsAtMost()
+	n.Structures = make([]network.Structure, 0, rows)
+	r.structures = newIDs(rows, func(i int32) (string, int32) { return n.Structures[i].ID, n.Structures[i].Line })
 	eachRow(t, func(row *structureRow) {
 		s := network.Structure{Line: int32(t.line), Note: note(row.Note)}
 		s.Kind = network.Kind(t.word("kind", row.Kind, network.Kinds))

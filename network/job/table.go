@@ -100,6 +100,9 @@ func (t *table) readHeadings() bool {
 	return true
 }
 
+// rowsAtMost is a number of rows that the table does not exceed, for making room.
+func (t *table) rowsAtMost() int { return bytes.Count(t.text, []byte("\n")) + 1 }
+
 // separator takes the one of tab, semicolon and comma that the heading row has most of.
 func separator(text []byte) rune {
 	for line := range bytes.Lines(text) {

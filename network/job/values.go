@@ -1,7 +1,6 @@
 package job
 
 import (
-	"maps"
 	"slices"
 	"strings"
 
@@ -64,47 +63,11 @@ func (t *table) word(field, text string, words []string) int {
 	return i
 }
 
-// ids gives identifiers their index and finds those that stand twice.
-type ids struct {
-	index map[string]int32
-	line  func(i int32) int32
-}
-
-func newIDs(rows int, line func(int32) int32) ids { return ids{make(map[string]int32, rows), line} }
-
-// add judges the id of a new row, whose index is i. The text is copied.
-func (d *ids) add(t *table, text string, i int) string {
-	text = strings.TrimSpace(text)
-	if text == "" {
-		t.faultAt("id", "id is blank: every row needs a name of its own")
-		return ""
-	}
-	if first, twice := d.index[text]; twice {
-		t.faultAt("id", "id %q stands twice, first in line %d", text, d.line(first))
-		return text
-	}
-	text = strings.Clone(text)
-	d.index[text] = int32(i)
-	return text
-}
-
-// nearest words the known id that is closest to one that is not known; it looks at
-// no more than a few thousand, since a file with a wrong column names an unknown
-// structure in every row.
-func (d *ids) nearest(text string) string {
-	if len(d.index) > 5000 {
-		return ""
-	}
-	if near, ok := fault.Nearest(text, slices.Sorted(maps.Keys(d.index))); ok {
-		return "; did you mean \"" + near + "\"?"
-	}
-	return ""
-}
-
-// structure looks up the structure that a cell names.
+// structure looks up the structure that a cell names. Rows mostly follow the
+// order of structures.csv, so the neighbours of the last one found are tried first.
 func (r *reader) structure(t *table, field, text string) network.StructureIndex {
 	text = strings.TrimSpace(text)
-	if i, ok := r.structures.index[text]; ok {
+	if i, ok := r.structures.find(text); ok {
 		return network.StructureIndex(i)
 	}
 	if len(r.structures.index) == 0 {

@@ -13,7 +13,11 @@ func appendNumber(b []byte, v float64) []byte {
 	if math.IsNaN(v) || math.IsInf(v, 0) {
 		return append(b, "null"...) // cannot come from a run; JSON has no word for it
 	}
-	if a := math.Abs(v); a != 0 && (a < 1e-6 || a >= 1e21) {
+	a := math.Abs(v)
+	if a < 1e15 && v == math.Trunc(v) { // whole numbers are common, and quicker this way
+		return strconv.AppendInt(b, int64(v), 10)
+	}
+	if a < 1e-6 || a >= 1e21 {
 		return strconv.AppendFloat(b, v, 'e', -1, 64)
 	}
 	return strconv.AppendFloat(b, v, 'f', -1, 64)
