@@ -123,6 +123,10 @@ func judge(r *Result, chooser *size.Chooser) []finding.Finding {
 	s := &r.Job.Settings
 	run := finding.Run{
 		Network: r.Network, Criteria: &s.Criteria, Storm: &r.Design.Storm, Units: s.Units, FlowUnit: s.FlowUnit, Flows: &r.Design.Flows,
+		Lines: r.Design.Lines,
+	}
+	if c := r.Check; c != nil {
+		run.Check = &finding.StormLines{Storm: &c.Storm, Flows: &c.Flows, Lines: c.Lines, Tailwater: grade.CheckTailwater}
 	}
 	if chooser != nil {
 		run.Remarks = chooser.Remarks()

@@ -14,6 +14,24 @@ var rules = []Rule{
 		Error, "", "Missouri DOT EPG 750.4; Mooresville IN code",
 	},
 	{
+		"surcharge", "under pressure",
+		"the grade line stands above the crown at an end of the pipe",
+		"the joints leak and the water has less room left to the rim; many agencies want the design storm below the crown",
+		Warning, "", "grade line at the crown: Mooresville IN code; drawn where above it: San Benito County CA 23.31.044",
+	},
+	{
+		"flooding", "grade line above the rim",
+		"the grade line at the structure stands above its rim; it is not cut off there, and no water is lost from the pipes below",
+		"water comes out of the structure, or cannot get in; the flow that would stay outside is an estimate for this structure alone",
+		Error, "", "below grate or rim: Mooresville IN code; Shepherdsville KY ch. 154",
+	},
+	{
+		"freeboard", "too little freeboard",
+		"the rim is less than the freeboard above the grade line",
+		"the margin covers what the method leaves out: debris, waves, losses that are larger than reckoned",
+		Error, "freeboard, size_for", "0.5 to 1 ft by agency: Colorado Springs CO DCM vol. 1 ch. 9; Apache Junction AZ 10-4-7",
+	},
+	{
 		"depth-ratio", "deeper than allowed",
 		"the depth at design flow is over the allowed part of the rise, though under full-bore capacity",
 		"the spare height that the criteria keep for air and for growth is used up",
@@ -24,6 +42,12 @@ var rules = []Rule{
 		"every size of the catalogue falls short of the design flow where the pipe must lie; the largest was taken",
 		"more barrels, another shape or a steeper line is needed",
 		Error, "catalog.csv", common,
+	},
+	{
+		"grade-line-size", "larger for the grade line",
+		"the pipe was enlarged beyond what its flow asks for, because the grade line broke the freeboard",
+		"the reviewer sees which sizes the freeboard costs",
+		Notice, "size_for", common,
 	},
 	{
 		"adverse-slope", "level or rising pipe",
@@ -132,6 +156,42 @@ var rules = []Rule{
 		"the velocity of a pipe into an outfall is over the velocity that needs no protection",
 		"the bed below the outlet scours",
 		Warning, "max_outlet_velocity", "6 ft/s: Shepherdsville KY ch. 154",
+	},
+	{
+		"drowned-outfall", "drowned outfall",
+		"the receiving water stands above the crown of the pipe at its outfall",
+		"the pipe cannot drain by itself, silt settles, and the line above starts from the receiving water",
+		Warning, "tailwater", common,
+	},
+	{
+		"fast-bend", "fast water into a bend",
+		"water faster than critical has to turn by more than 10 degrees, at the lower structure or along the pipe",
+		"it climbs the outer wall, may choke the pipe out and wears the structure; no loss formula covers it",
+		Warning, "", common,
+	},
+	{
+		"angle-assumed", "angle not known",
+		"neither coordinates nor the angle column tell how the pipe meets the pipe out; the largest pipe in was taken straight, others at 90 degrees",
+		"the loss of the structure depends on it",
+		Warning, "angle, x, y", common,
+	},
+	{
+		"jump", "hydraulic jump",
+		"the water changes from fast to slow flow in the pipe",
+		"it mixes in air, shakes the joints and wears the invert where it stands",
+		Notice, "", common,
+	},
+	{
+		"low-tailwater", "receiving water below the pipe",
+		"the tailwater of the outfall is below the invert of the pipe; the outfall was taken as free",
+		"the fall to the receiving water may scour the bed, or the level may be on another datum",
+		Notice, "tailwater", common,
+	},
+	{
+		"grade-line-unknown", "no grade line",
+		"a pipe below has no inverts, so that the level from which the line would start is not known",
+		"what is not judged has to be looked at by hand",
+		Notice, "pipes.csv invert_upper", common,
 	},
 	{
 		"flow-falls", "peak falls downstream",

@@ -107,3 +107,6 @@ type Parts struct {
 func (p Parts) Sum() float64 {
 	return p.Entrance + p.Benching + p.Angle + p.Plunging + p.Held + p.Coefficient + p.Junction
 }
+
+// Method is the method of the structures' losses.
+func (l *Lines) Method() Method { return l.settings.Method }
