@@ -14,12 +14,17 @@ func (a *app) checkCommand() *cobra.Command {
 		Short: "Run the pipes of a job as they are",
 		Long: `check runs the design storm, and the check storm where there is one, through the
 pipes of a job as they are given, and prints flows, capacities, depths, velocities,
-cover and findings. Every pipe needs a size and a slope; ` + "`rimfall size`" + ` chooses what is blank.
+cover, hydraulic and energy grade lines and findings. Every pipe needs a size and a
+slope; ` + "`rimfall size`" + ` chooses what is blank.
 
-How a pipe runs at its design flow is one word:
-  dry         no flow
-  part-full   a free surface at normal depth
-  full        the full area: over full-bore capacity, or the pipe does not fall`,
+The grade lines run from the outfalls up. How a pipe then runs is one word:
+  dry                  no flow
+  part-full            a free surface from end to end
+  full                 full from end to end
+  partly-full-length   full over a part of the length
+  jump                 a hydraulic jump stands in the pipe; below it the pipe may run full
+A pipe without inverts, or above one, has no grade line; its word then says how it
+would run by itself.`,
 		Example: "  rimfall check examples/orchard-rise-sized\n  rimfall check JOB --format json --storm 25\n  rimfall check JOB --table findings --strict",
 		Args:    oneJob,
 		RunE: func(cmd *cobra.Command, args []string) error {

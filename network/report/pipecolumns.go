@@ -56,7 +56,7 @@ var PipeGroups = []Group{
 
 // CheckGroups are the tables of the check storm: what it changes.
 var CheckGroups = []Group{
-	{"Pipes", []string{"id", "time", "intensity", "flow", "capacity", "capacity_ratio", "depth", "depth_ratio", "velocity", "regime"}},
+	{"Pipes", []string{"id", "time", "intensity", "flow", "capacity", "capacity_ratio", "depth", "depth_ratio", "velocity", "regime", "hgl_upper", "hgl_lower"}},
 }
 
 // Group is a table for people: a title and the keys of its columns.

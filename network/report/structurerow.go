@@ -85,3 +85,8 @@ var StructureGroups = []Group{
 	{"Structures", []string{"id", "kind", "rim", "area", "ca", "time", "flow", "lowest_invert_in", "lowest_invert_out", "height"}},
 	{"Grade line and losses at the structures", []string{"id", "rim", "hgl", "freeboard", "loss_entrance", "loss_benching", "loss_angle", "loss_plunging", "loss_held", "loss_coefficient", "loss_junction"}},
 }
+
+// StructureCheckGroups are the tables of structures of the check storm: what it changes.
+var StructureCheckGroups = []Group{
+	{"Structures", []string{"id", "kind", "rim", "flow", "hgl", "freeboard"}},
+}

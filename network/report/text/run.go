@@ -28,7 +28,10 @@ func Run(w io.Writer, r *analysis.Result, o Options) error {
 		}
 	}
 	if o.Table == "" || o.Table == "structures" {
-		structureTables(p, r, &r.Design, "")
+		structureTables(p, r, &r.Design, report.StructureGroups, "")
+		if r.Check != nil {
+			structureTables(p, r, r.Check, report.StructureCheckGroups, fmt.Sprintf(", check storm of %g years", r.Check.Storm.ReturnPeriod))
+		}
 	}
 	if o.Table == "" || o.Table == "findings" {
 		p.findings(r.Findings)
@@ -52,12 +55,12 @@ func pipeTables(p *printer, r *analysis.Result, storm *analysis.StormRun, groups
 	}
 }
 
-func structureTables(p *printer, r *analysis.Result, storm *analysis.StormRun, suffix string) {
+func structureTables(p *printer, r *analysis.Result, storm *analysis.StormRun, groups []report.Group, suffix string) {
 	rows := make([]report.StructureRow, len(r.Network.Structures))
 	for i := range rows {
 		rows[i] = report.Structure(r, storm, network.StructureIndex(i))
 	}
-	for _, g := range report.StructureGroups {
+	for _, g := range groups {
 		p.table(g.Title+suffix, makeGrid(p.style, report.Pick(report.StructureColumns, g.Keys), rows))
 	}
 }
