@@ -96,6 +96,3 @@ func within(t testing.TB, row printed, key string, got, tolerance float64) {
 		t.Errorf("%s is %.5g, printed %g, which allows %.3g", key, got, want, tolerance)
 	}
 }
-
-// secondsPerMinute turns lengths over travel times into velocities.
-const secondsPerMinute = 60
