@@ -56,11 +56,11 @@ func writeStructures(w *bufio.Writer, n *network.Network) {
 }
 
 func writePipes(w *bufio.Writer, n *network.Network) {
-	fmt.Fprintln(w, "id,from,to,length,size,n,invert_upper,slope")
+	fmt.Fprintln(w, "id,from,to,length,size,n,invert_upper,slope,angle")
 	for i := range n.Pipes {
 		p := &n.Pipes[i]
-		fmt.Fprintf(w, "%s,%s,%s,%s,%s,%s,%s,%s\n", p.ID, n.Structures[p.From].ID, n.Structures[p.To].ID,
-			number(p.Length), number(p.Size.Rise), number(p.N), number(p.InvertUpper.V), number(p.Slope.V))
+		fmt.Fprintf(w, "%s,%s,%s,%s,%s,%s,%s,%s,%s\n", p.ID, n.Structures[p.From].ID, n.Structures[p.To].ID,
+			number(p.Length), number(p.Size.Rise), number(p.N), number(p.InvertUpper.V), number(p.Slope.V), number(p.Angle.V))
 	}
 }
 

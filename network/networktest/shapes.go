@@ -32,13 +32,14 @@ const systemSize = 200
 func New(shape Shape, pipes int) *network.Network {
 	n := &network.Network{}
 	next := downstream(shape)
-	steps := make([]int, pipes) // pipes down to the outfall, this one included
+	upper := make([]float64, pipes) // inverts
 	for i := range pipes {
-		steps[i] = 1
-		if to := next(i); to >= 0 {
-			steps[i] += steps[to]
+		inches := size(shape, i)
+		upper[i] = outfallInvert + pipeSlope*pipeLength
+		if to := next(i); to >= 0 { // crowns line up, with a fall
+			upper[i] = upper[to] + (size(shape, to)-inches)/12 + structureFall + pipeSlope*pipeLength
 		}
-		rim := network.Some(16 + pipeFall*float64(steps[i]))
+		rim := network.Some(upper[i] + inches/12 + wall + cover)
 		n.Structures = append(n.Structures, network.Structure{ID: fmt.Sprintf("S%d", i), Rim: rim, Line: int32(i + 2)})
 	}
 	for i := range pipes {
@@ -47,8 +48,8 @@ func New(shape Shape, pipes int) *network.Network {
 			to = len(n.Structures)
 			n.Structures = append(n.Structures, network.Structure{ID: fmt.Sprintf("O%d", i), Kind: network.Outfall, Line: int32(to + 2)})
 		}
-		n.Pipes = append(n.Pipes, pipe(i, steps[i], size(shape, i), network.StructureIndex(i), network.StructureIndex(to)))
-		n.Areas = append(n.Areas, network.Area{ID: fmt.Sprintf("A%d", i), Structure: network.StructureIndex(i), Area: 0.2, C: 0.5, Time: network.Some(8)})
+		n.Pipes = append(n.Pipes, pipe(i, upper[i], size(shape, i), network.StructureIndex(i), network.StructureIndex(to)))
+		n.Areas = append(n.Areas, network.Area{ID: fmt.Sprintf("A%d", i), Structure: network.StructureIndex(i), Area: 0.02, C: 0.5, Time: network.Some(8)})
 	}
 	n.Connect()
 	return n
@@ -99,22 +100,23 @@ var sections = func() map[float64]pipeflow.Section {
 	return all
 }()
 
-// A pipe is short, so that a chain of a million stays within a rainfall table. It
-// lies under even ground, its invert by the number of pipes to the outfall below
-// it, so that few findings arise.
+// A pipe is short, so that a chain of a million stays within a rainfall table, and
+// lies so that few findings arise in a forest. Lengths in feet.
 const (
-	pipeLength = 30
-	pipeSlope  = 0.006
-	pipeFall   = pipeSlope*pipeLength + 0.1 // with the fall through a structure
+	pipeLength    = 30
+	pipeSlope     = 0.006
+	structureFall = 0.1
+	wall          = 0.25
+	cover         = 5
+	outfallInvert = 10
 )
 
-func pipe(i, steps int, inches float64, from, to network.StructureIndex) network.Pipe {
-	upper := 10 + pipeFall*float64(steps)
+func pipe(i int, upper, inches float64, from, to network.StructureIndex) network.Pipe {
 	s := sections[inches]
 	return network.Pipe{
 		ID: fmt.Sprintf("P%d", i), From: from, To: to, Length: pipeLength, Shape: "circle", Section: s,
-		Size: network.Size{Span: inches, Rise: inches}, Count: 1, N: 0.013,
+		Size: network.Size{Span: inches, Rise: inches}, Count: 1, N: 0.013, Angle: network.Some(0),
 		InvertUpper: network.Some(upper), InvertLower: network.Some(upper - pipeSlope*pipeLength), Slope: network.Some(pipeSlope),
-		Wall: 0.25, HasWall: true, Line: int32(i + 2),
+		Wall: wall, HasWall: true, Line: int32(i + 2),
 	}
 }

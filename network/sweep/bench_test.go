@@ -64,7 +64,7 @@ func TestAChainOfThreeMillionPipesRuns(t *testing.T) {
 	if len(problems) > 0 {
 		t.Fatal(problems[0].Text)
 	}
-	if got, want := flows.Pipes[0].Area, 0.2*pipes; got < want*(1-1e-9) || got > want*(1+1e-9) {
+	if got, want := flows.Pipes[0].Area, 0.02*pipes; got < want*(1-1e-9) || got > want*(1+1e-9) {
 		t.Errorf("area at the lower end is %v, want %v", got, want)
 	}
 }
