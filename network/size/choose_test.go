@@ -17,7 +17,7 @@ import (
 //   - concrete pipe of wall B, D/12 + 1 in: 12 in has 2 in, 15 in 2.25 in, 18 in 2.5 in, 24 in 3 in;
 //   - 12 in under 1 ft of cover: upper invert 100 − 1 − 2/12 − 1 = 97.8333, in whole hundredths 97.83;
 //   - 12 in full (or half full: R = D/4 in both) at 3 ft/s: S = (0.013 · 3/(1.486 · 0.25^(2/3)))² = 0.0043736;
-//   - 12 in full on S: 1.486/0.013 · 0.785398 · 0.25^(2/3) · √S = 35.6277 √S cfs.
+//   - 12 in full on S: 1.486/0.013 · 0.785398 · 0.25^(2/3) · √S = 35.6280 √S cfs.
 const (
 	structureA, structureB = 0, 1
 	pipeAB, pipeBC         = 0, 1

@@ -13,7 +13,7 @@ import (
 func TestTheSmallestSizeThatCarriesTheFlowWhereItLiesIsTaken(t *testing.T) {
 	hold(t, []sizingCase{
 		{
-			// 12 in on the ground's 2 %: 35.6277 · 0.141421 = 5.0385 cfs.
+			// 12 in on the ground's 2 %: 35.6280 · 0.141421 = 5.0385 cfs.
 			"the smallest just carries", pipeAB, 5.038, rims(100, 98), chosen{12, 97.83, 95.83},
 		},
 		{

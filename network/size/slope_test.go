@@ -22,7 +22,7 @@ func rims(a, b float64) func(s *situation) {
 	}
 }
 
-// halfFull is the flow of a 12 in pipe half full on a slope: half of 35.6277 √S,
+// halfFull is the flow of a 12 in pipe half full on a slope: half of 35.6280 √S,
 // since A is half and R the same as full.
 func halfFull(slope float64) float64 {
 	return 0.5 * 1.486 / 0.013 * math.Pi / 4 * math.Pow(0.25, 2.0/3) * math.Sqrt(slope)
