@@ -7,7 +7,6 @@ import (
 
 	"rimfall/network"
 	"rimfall/network/analysis"
-	"rimfall/network/finding"
 	"rimfall/network/report"
 )
 
@@ -34,7 +33,7 @@ func Run(w io.Writer, r *analysis.Result, o Options) error {
 		}
 	}
 	if o.Table == "" || o.Table == "findings" {
-		p.findings(r.Findings)
+		p.findings(r.Findings, r.Design.Storm.ReturnPeriod, o.Table == "")
 	}
 	p.cautions()
 	return p.err
@@ -131,30 +130,6 @@ func (p *printer) table(title string, g grid) {
 	p.err = g.drawText(&b)
 	for _, l := range strings.Split(strings.TrimRight(b.String(), "\n"), "\n") {
 		p.line("%s", strings.TrimRight(l, " "))
-	}
-}
-
-// findings prints them by rule, with the counts.
-func (p *printer) findings(found []finding.Finding) {
-	title := "Findings: " + report.CountFindings(found).String()
-	if len(found) == 0 {
-		p.title("Findings: none")
-		return
-	}
-	if p.markdown {
-		p.table(title, makeGrid(p.style, report.FindingColumns, found))
-		return
-	}
-	p.title(title)
-	for i := range found {
-		f := &found[i]
-		if i == 0 || found[i-1].Rule != f.Rule {
-			p.line("  %s, %s (%s)", f.Rule.Severity, f.Rule.Title, f.Rule.Name)
-		}
-		p.line("    %-8s  %s", f.Subject, f.Message)
-		if f.Accepted != "" {
-			p.line("    %-8s  accepted departure: %s", "", f.Accepted)
-		}
 	}
 }
 

@@ -1,0 +1,55 @@
+package text
+
+import (
+	"strings"
+
+	"rimfall/network/finding"
+	"rimfall/network/report"
+)
+
+// findings prints them by rule, with the counts. In brief, a rule's findings for
+// another storm than the design storm are one list of their subjects.
+func (p *printer) findings(found []finding.Finding, design float64, brief bool) {
+	if len(found) == 0 {
+		p.title("Findings: none")
+		return
+	}
+	title := "Findings: " + report.CountFindings(found).String()
+	if p.markdown {
+		p.table(title, makeGrid(p.style, report.FindingColumns, found))
+		return
+	}
+	p.title(title)
+	for i := 0; i < len(found); {
+		end := i
+		for end < len(found) && found[end].Rule == found[i].Rule {
+			end++
+		}
+		p.line("  %s, %s (%s)", found[i].Rule.Severity, found[i].Rule.Title, found[i].Rule.Name)
+		p.ofRule(found[i:end], design, brief)
+		i = end
+	}
+}
+
+// ofRule prints the findings of one rule.
+func (p *printer) ofRule(found []finding.Finding, design float64, brief bool) {
+	var others []string // subjects in the check storm
+	for i := range found {
+		f := &found[i]
+		if brief && f.Storm != design && f.Accepted == "" {
+			others = append(others, f.Subject)
+			continue
+		}
+		p.line("    %-8s  %s", f.Subject, f.Message)
+		if f.Accepted != "" {
+			p.line("    %-8s  accepted departure: %s", "", f.Accepted)
+		}
+	}
+	if len(others) > 0 {
+		label := "    in the check storm at "
+		for _, l := range wrap(strings.Join(others, ", "), lineWidth-len(label)) {
+			p.line("%s%s", label, l)
+			label = strings.Repeat(" ", len(label))
+		}
+	}
+}
