@@ -1,0 +1,111 @@
+package drawing
+
+import (
+	"math"
+	"strconv"
+
+	"rimfall/network"
+	"rimfall/network/finding"
+)
+
+// mark is a number beside a structure or pipe that findings are about.
+type mark struct {
+	number    int
+	subject   string
+	breaks    bool // one of the findings is an error that no departure accepts
+	findings  []*finding.Finding
+	structure network.StructureIndex
+	pipe      network.PipeIndex
+	isPipe    bool
+}
+
+// marksOf numbers the structures and pipes with errors and warnings, structures first, in the order of the files.
+// Notices and accepted departures have no mark.
+func marksOf(r *run) []mark {
+	bySubject := map[string][]*finding.Finding{}
+	for i := range r.Findings {
+		if f := &r.Findings[i]; f.Accepted == "" && f.Rule.Severity != finding.Notice {
+			bySubject[f.Subject] = append(bySubject[f.Subject], f)
+		}
+	}
+	var marks []mark
+	add := func(subject string, m mark) {
+		// A structure and a pipe may share an id; each takes the findings that are about its kind of thing.
+		for _, f := range bySubject[subject] {
+			if m.isPipe && f.AboutPipe() || !m.isPipe && f.AboutStructure() {
+				m.findings = append(m.findings, f)
+				m.breaks = m.breaks || f.Breaks()
+			}
+		}
+		if len(m.findings) > 0 {
+			m.number, m.subject = len(marks)+1, subject
+			marks = append(marks, m)
+		}
+	}
+	for i := range r.Network.Structures {
+		add(r.Network.Structures[i].ID, mark{structure: network.StructureIndex(i)})
+	}
+	for i := range r.Network.Pipes {
+		add(r.Network.Pipes[i].ID, mark{pipe: network.PipeIndex(i), isPipe: true})
+	}
+	return marks
+}
+
+const markRadius = 1.75
+
+// findingMarks places the numbers.
+func (p *plan) findingMarks() {
+	for i := range p.marks {
+		m := &p.marks[i]
+		at, ok := p.at(m.structure)
+		radius := symbolSize
+		if m.isPipe {
+			var from, to Point
+			from, to, ok = p.ends(m.pipe)
+			at, radius = Point{(from.X + to.X) / 2, (from.Y + to.Y) / 2}, 0.6
+		}
+		if !ok {
+			continue
+		}
+		chosen, ok := p.place.choose(markSpots(at, radius))
+		if !ok {
+			p.notes.NoRoom++
+			continue
+		}
+		b := chosen.room[0]
+		if chosen.leader {
+			p.Line(chosen.from(), chosen.at, leader)
+		}
+		p.drawMark(Point{(b.Left + b.Right) / 2, (b.Top + b.Bottom) / 2}, m.number, m.breaks)
+	}
+}
+
+// markSpots are places for a number around a point.
+func markSpots(at Point, radius float64) []spot {
+	var spots []spot
+	for out := 0.5; out < 22; out = out*1.35 + 1 {
+		for d := range 16 {
+			sin, cos := math.Sincos(-math.Pi/4 + 2*math.Pi*float64(d)/16)
+			c := Point{at.X + (radius+out+markRadius)*cos, at.Y + (radius+out+markRadius)*sin}
+			spots = append(spots, spot{
+				room:   []Box{Box{c.X, c.Y, c.X, c.Y}.grown(markRadius)},
+				leader: out > 0.5, at: Point{at.X + radius*cos, at.Y + radius*sin},
+			})
+		}
+	}
+	return spots
+}
+
+// drawMark draws a number in a ring: white on black for errors.
+func (s *sheet) drawMark(at Point, n int, breaks bool) {
+	fill := White
+	if breaks {
+		fill = Black
+	}
+	s.Ellipse(at, markRadius, markRadius, medium, fill)
+	size := 2.2
+	if n > 99 {
+		size = 1.8
+	}
+	s.Text(Label{At: Point{at.X, at.Y + 0.36*size}, Size: size, Anchor: Middle, Bold: true, White: breaks, Text: strconv.Itoa(n)})
+}

@@ -1,0 +1,156 @@
+package drawing
+
+import (
+	"math"
+
+	"rimfall/network"
+	"rimfall/network/units"
+)
+
+// Room of a profile sheet, mm.
+const (
+	headColumn  = 44.0 // the headings of the table, and left of the graph its levels
+	levelColumn = 13.0 // levels right of the graph
+	sideRoom    = 14.0 // in the graph beyond the first and the last structure
+	nameBand    = 11.0 // names of the structures over the graph
+	stationBand = 4.5  // stations of the grid under the graph
+	fanBand     = 6.0  // lines from the stations to the columns of the table
+	rowHeight   = 3.9
+	tableFoot   = 1.0
+	spareHeight = 14.0 // in the graph over and under the levels
+)
+
+// Limits of the scales that are chosen. Beyond the smallest scale a line goes on on a further sheet; a profile is not
+// drawn out of shape more than 25 times (common practice: ten is usual).
+const (
+	smallestScaleFeet   = 200.0
+	smallestScaleMetres = 2000.0
+	greatestRatio       = 25.0
+)
+
+// part is what one sheet shows of a line: structures first to last.
+type part struct{ first, last int }
+
+// layout is how a line is laid on its sheets.
+type layout struct {
+	parts        []part
+	along, up    scale
+	exaggeration float64
+	gaps         []float64
+	table        table
+}
+
+// across is the width of the graph between the first and the last structure.
+func across(p Paper) float64 {
+	return p.Width - 2*edge - headColumn - levelColumn - 2*sideRoom
+}
+
+// graphHeight is what is left for the graph over the table.
+func graphHeight(p Paper, t *table) float64 {
+	return p.Height - 2*edge - stripHeight - nameBand - stationBand - fanBand - float64(t.rows())*rowHeight - tableFoot
+}
+
+// newLayout chooses the scales: along the line the largest at which it fits on one sheet, or on the fewest; upright the
+// largest at which every sheet has room for its levels.
+func newLayout(r *run, l *line, paper Paper) layout {
+	t := newTable(r, l)
+	a := layout{table: t, gaps: t.gaps()}
+	u := r.units
+	smallest := smallestScaleFeet
+	if u.Name == units.SI.Name {
+		smallest = smallestScaleMetres
+	}
+	for _, s := range scales(u, firstScale(u)) {
+		parts, ok := a.split(l, s, across(paper))
+		if ok && (a.parts == nil || len(parts) < len(a.parts)) {
+			a.parts, a.along = parts, s
+		}
+		if len(a.parts) == 1 || a.parts != nil && s.ratio >= smallest {
+			break
+		}
+	}
+	height := graphHeight(paper, &t)
+	for _, s := range scales(u, firstScale(u)/10) {
+		a.up, a.exaggeration = s, s.mm/a.along.mm
+		if a.exaggeration <= greatestRatio*(1+1e-9) && a.tallest(r, l) <= (height-spareHeight)/s.mm {
+			break
+		}
+	}
+	return a
+}
+
+// split cuts a line at structures into parts that fit across a sheet at a scale: each as long as it can be. ok is false
+// where a single pipe does not fit.
+func (a *layout) split(l *line, s scale, width float64) (parts []part, ok bool) {
+	first, columns := 0, 0.0
+	for k := range l.pipes {
+		columns += a.gaps[k]
+		if (l.stations[k+1]-l.stations[first])*s.mm <= width && columns <= width {
+			continue
+		}
+		if k == first {
+			return nil, false
+		}
+		parts = append(parts, part{first, k})
+		first, columns = k, a.gaps[k]
+		if (l.stations[k+1]-l.stations[k])*s.mm > width {
+			return nil, false
+		}
+	}
+	return append(parts, part{first, len(l.pipes)}), true
+}
+
+// tallest is the greatest range of levels of any part.
+func (a *layout) tallest(r *run, l *line) float64 {
+	most := 0.0
+	for _, p := range a.parts {
+		if low, high, ok := levels(r, l, p); ok {
+			most = max(most, high-low)
+		}
+	}
+	return most
+}
+
+// levels is the range of everything that is drawn of a part; ok is false where no level is known.
+func levels(r *run, l *line, p part) (low, high float64, ok bool) {
+	low, high = math.Inf(1), math.Inf(-1)
+	note := func(values ...network.Maybe) {
+		for _, v := range values {
+			if v.OK {
+				low, high = min(low, v.V), max(high, v.V)
+			}
+		}
+	}
+	n := r.Network
+	for k := p.first; k <= p.last; k++ {
+		s := l.structures[k]
+		note(n.Structures[s].Rim)
+		for _, i := range n.PipesIn(s) {
+			note(n.Pipes[i].InvertLower, crown(&n.Pipes[i], network.Lower))
+		}
+		for i := range r.storms {
+			note(r.storms[i].level(s), r.storms[i].tailwater(&n.Structures[s]))
+		}
+	}
+	for k := p.first; k < p.last; k++ {
+		noteAlong(r, l.pipes[k], note)
+	}
+	return low, high, low <= high
+}
+
+// noteAlong notes the levels along a pipe.
+func noteAlong(r *run, p network.PipeIndex, note func(...network.Maybe)) {
+	pipe := &r.Network.Pipes[p]
+	note(pipe.InvertUpper, pipe.InvertLower, crown(pipe, network.Upper), crown(pipe, network.Lower))
+	for _, g := range r.Network.GroundOver(p) {
+		note(network.Some(g.Elevation))
+	}
+	for _, c := range r.crossings[p] {
+		note(network.Some(c.Top), network.Some(c.Bottom))
+	}
+	for i := range r.storms {
+		for _, at := range r.storms[i].trace(p) {
+			note(network.Some(at.HGL), network.Some(at.EGL))
+		}
+	}
+}
