@@ -39,7 +39,7 @@ var PipeColumns = []Column[PipeRow]{
 	{"hgl_lower", []string{"grade line,", "lower end"}, Level, func(r *PipeRow) Value { return line(r, r.Line.HGLLower) }},
 	{"egl_upper", []string{"energy line,", "upper end"}, Level, func(r *PipeRow) Value { return line(r, r.Line.EGLUpper) }},
 	{"egl_lower", []string{"energy line,", "lower end"}, Level, func(r *PipeRow) Value { return line(r, r.Line.EGLLower) }},
-	{"regime", []string{"runs"}, Text, func(r *PipeRow) Value { return T(r.Line.Regime.String()) }},
+	{"regime", []string{"runs"}, Text, func(r *PipeRow) Value { return T(r.Regime()) }},
 	{"jump", []string{"jump, from", "lower end"}, Length, func(r *PipeRow) Value { return M(r.Line.Jump) }},
 	{"full_length", []string{"length", "flowing full"}, Length, func(r *PipeRow) Value { return line(r, r.Line.FullLength) }},
 	{"bend_loss", []string{"bend", "loss"}, Length, func(r *PipeRow) Value { return Value{Number: r.Line.Bend, OK: r.Line.Bend > 0} }},

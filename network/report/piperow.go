@@ -62,3 +62,13 @@ func line(r *PipeRow, v float64) Value { return Value{Number: v, OK: r.Line.Know
 
 // running gives a value only where water flows.
 func running(r *PipeRow, v float64) Value { return Value{Number: v, OK: r.Run.State != sweep.Dry} }
+
+// Regime is how the pipe runs, in one plain word: as its grade line says, but
+// "full" wherever the flow is over full-bore capacity, as the contract of results
+// has it; full_length tells how much of such a pipe the grade line finds full.
+func (r *PipeRow) Regime() string {
+	if r.Run.State == sweep.Full && r.Run.HasCapacity {
+		return grade.Full.String()
+	}
+	return r.Line.Regime.String()
+}
