@@ -47,6 +47,9 @@ func (d *ids) find(text string) (int32, bool) {
 }
 
 func (d *ids) search(text string) (int32, bool) {
+	if d.index == nil { // of a table that could not be read
+		return 0, false
+	}
 	if i, ok := d.index[maphash.String(d.seed, text)]; ok {
 		if id, _ := d.row(i); id == text {
 			return i, true
