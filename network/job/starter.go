@@ -5,7 +5,6 @@ import (
 	"fmt"
 	"io/fs"
 	"os"
-	"path/filepath"
 )
 
 // starters are small jobs that run, with every column explained in comments.
@@ -23,17 +22,5 @@ func WriteStarter(dir, units string) error {
 	if err != nil {
 		return err
 	}
-	parent := filepath.Dir(filepath.Clean(dir))
-	if err := os.MkdirAll(parent, 0o755); err != nil {
-		return fmt.Errorf("writing %s: %w", dir, err)
-	}
-	temporary, err := os.MkdirTemp(parent, ".new-job-")
-	if err != nil {
-		return fmt.Errorf("writing %s: %w", dir, err)
-	}
-	defer os.RemoveAll(temporary) // nothing is left of it once it has been renamed
-	if err := os.CopyFS(temporary, files); err != nil {
-		return fmt.Errorf("writing %s: %w", dir, err)
-	}
-	return replaceFolder(temporary, dir)
+	return writeFolder(dir, func(temporary string) error { return os.CopyFS(temporary, files) })
 }

@@ -20,6 +20,12 @@ func (j *Job) Write(dir string, completed *network.Network, force bool) error {
 	if err := j.mayWrite(dir, force); err != nil {
 		return err
 	}
+	return writeFolder(dir, func(temporary string) error { return j.writeInto(temporary, completed) })
+}
+
+// writeFolder makes a folder whole or not at all: fill writes into a temporary one
+// beside it, which is then renamed.
+func writeFolder(dir string, fill func(temporary string) error) error {
 	parent := filepath.Dir(filepath.Clean(dir))
 	if err := os.MkdirAll(parent, 0o755); err != nil {
 		return fmt.Errorf("writing %s: %w", dir, err)
@@ -29,7 +35,7 @@ func (j *Job) Write(dir string, completed *network.Network, force bool) error {
 		return fmt.Errorf("writing %s: %w", dir, err)
 	}
 	defer os.RemoveAll(temporary) // nothing is left of it once it has been renamed
-	if err := j.writeInto(temporary, completed); err != nil {
+	if err := fill(temporary); err != nil {
 		return fmt.Errorf("writing %s: %w", dir, err)
 	}
 	if err := replaceFolder(temporary, dir); err != nil {
