@@ -63,7 +63,7 @@ func (r *reader) pipe(t *table, text string) (p network.PipeIndex, ok bool) {
 		return network.PipeIndex(i), true
 	}
 	switch {
-	case r.pipes.index == nil: // the table of pipes could not be read, which is a fault already
+	case r.pipes.slots == nil: // the table of pipes could not be read, which is a fault already
 	case text == "":
 		t.faultAt("pipe", "pipe is blank: name a pipe")
 	default:

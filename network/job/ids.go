@@ -2,6 +2,7 @@ package job
 
 import (
 	"hash/maphash"
+	"math/bits"
 	"slices"
 	"strings"
 
@@ -10,22 +11,28 @@ import (
 
 // ids gives identifiers their index and finds those that stand twice.
 //
-// It maps a hash of the text to the index and holds the texts themselves only
-// where the rows do: a map keyed by a million texts costs three times as much to
-// search, most of it waiting for memory. Two texts with one hash are told apart
-// by the overflow.
+// It is a table of slots, searched from the place that the hash of a text names
+// (linear probing), with a piece of the hash beside each index. The texts stand
+// in the rows only: a map keyed by a million texts takes several times as long,
+// most of it waiting for memory. The seed changes from run to run; no result
+// depends on it.
 type ids struct {
-	seed     maphash.Seed
-	index    map[uint64]int32
-	overflow map[string]int32
-	row      func(i int32) (id string, line int32)
-	last     int32 // found by the last search
-	rows     int32 // that are known to stand
+	seed  maphash.Seed
+	slots []slot // a power of two, at least twice the rows; nil: the table could not be read
+	row   func(i int32) (id string, line int32)
+	last  int32 // found by the last search
+	rows  int32 // that are known to stand
 }
 
-// newIDs makes room for a number of rows; row gives the id and line of a row.
+// slot is one place of the table; next is the index of a row and one, 0 in an empty slot.
+type slot struct {
+	tag  uint32
+	next int32
+}
+
+// newIDs makes room for at most a number of rows; row gives the id and line of a row.
 func newIDs(rows int, row func(i int32) (id string, line int32)) ids {
-	return ids{seed: maphash.MakeSeed(), index: make(map[uint64]int32, rows), row: row}
+	return ids{seed: maphash.MakeSeed(), slots: make([]slot, 1<<bits.Len(uint(2*rows))), row: row}
 }
 
 // find gives the index of an id. The rows beside the last one found are tried
@@ -47,17 +54,29 @@ func (d *ids) find(text string) (int32, bool) {
 }
 
 func (d *ids) search(text string) (int32, bool) {
-	if d.index == nil { // of a table that could not be read
+	if d.slots == nil {
 		return 0, false
 	}
-	if i, ok := d.index[maphash.String(d.seed, text)]; ok {
-		if id, _ := d.row(i); id == text {
-			return i, true
+	at := d.place(text)
+	return at.next - 1, at.next > 0
+}
+
+// place is the slot of a text: the one that holds it, or the empty one where it belongs.
+func (d *ids) place(text string) *slot {
+	hash := maphash.String(d.seed, text)
+	tag, mask := uint32(hash>>32), uint64(len(d.slots)-1)
+	for i := hash & mask; ; i = (i + 1) & mask {
+		at := &d.slots[i]
+		if at.next == 0 {
+			at.tag = tag // counts only once next is set
+			return at
 		}
-		i, ok = d.overflow[text]
-		return i, ok
+		if at.tag == tag {
+			if id, _ := d.row(at.next - 1); id == text {
+				return at
+			}
+		}
 	}
-	return 0, false
 }
 
 // add judges the id of a new row, whose index is i. The text is copied.
@@ -68,25 +87,14 @@ func (d *ids) add(t *table, text string, i int) string {
 		t.faultAt("id", "id is blank: every row needs a name of its own")
 		return ""
 	}
-	hash := maphash.String(d.seed, text)
-	first, taken := d.index[hash]
-	if taken {
-		if id, line := d.row(first); id == text {
-			t.faultAt("id", "id %q stands twice, first in line %d", text, line)
-			return text
-		}
-	}
-	text = strings.Clone(text)
-	d.rows = int32(i) + 1
-	if taken {
-		if d.overflow == nil {
-			d.overflow = map[string]int32{}
-		}
-		d.overflow[text] = int32(i)
+	at := d.place(text)
+	if at.next > 0 {
+		_, line := d.row(at.next - 1)
+		t.faultAt("id", "id %q stands twice, first in line %d", text, line)
 		return text
 	}
-	d.index[hash] = int32(i)
-	return text
+	at.next, d.rows = int32(i)+1, int32(i)+1
+	return strings.Clone(text)
 }
 
 // nearest words the known id that is closest to one that is not known; it looks at

@@ -70,7 +70,7 @@ func (r *reader) structure(t *table, field, text string) network.StructureIndex 
 	if i, ok := r.structures.find(text); ok {
 		return network.StructureIndex(i)
 	}
-	if len(r.structures.index) == 0 {
+	if r.structures.rows == 0 {
 		return -1 // the table of structures could not be read or is empty, which is a fault already
 	}
 	if text == "" {
