@@ -31,10 +31,10 @@ var arrows = map[string][]string{
 	"network/grade":       {"network", "network/units", "network/sweep", "pipeflow", "pipeflow/surface"},
 	"network/finding":     {"network", "network/units", "network/size", "network/sweep", "network/grade", "network/times", "pipeflow", "hydrology"},
 	"network/analysis":    {"network", "network/fault", "network/units", "network/job", "network/size", "network/sweep", "network/grade", "network/finding", "network/times", "hydrology"},
-	"network/calculator":  {"network/fault", "network/units", "pipeflow", "pipeflow/catalog"},
+	"network/calculator":  {"network", "network/fault", "network/units", "network/job", "pipeflow", "pipeflow/catalog"},
 	"network/review":      {"network/…", "hydrology", "pipeflow"},
 	"network/networktest": {"network", "pipeflow"},
-	"network/report":      {"network", "network/units", "network/analysis", "network/finding", "network/sweep", "network/grade", "network/calculator", "network/times", "network/job", "hydrology/…", "pipeflow"},
+	"network/report":      {"network", "network/units", "network/analysis", "network/finding", "network/sweep", "network/grade", "network/calculator", "network/times", "network/job", "hydrology/…", "pipeflow", "pipeflow/catalog"},
 
 	"network/report/text":    {"network/…", "hydrology/…", "pipeflow/…"},
 	"network/report/data":    {"network/…", "hydrology/…", "pipeflow/…"},

@@ -71,7 +71,8 @@ code; a licensed engineer checks and signs.`,
 			return cmd.Help()
 		},
 	}
-	root.AddCommand(a.checkCommand(), a.sizeCommand(), a.scheduleCommand(), a.newCommand(), a.rulesCommand())
+	root.AddCommand(a.checkCommand(), a.sizeCommand(), a.scheduleCommand(), a.newCommand(), a.rulesCommand(), a.manningCommand(), a.sizesCommand())
+	root.AddCommand(a.profileCommand(), a.planCommand())
 	root.SetFlagErrorFunc(func(cmd *cobra.Command, err error) error {
 		return usageError{err.Error() + "; see `" + cmd.CommandPath() + " --help`"}
 	})

@@ -84,7 +84,7 @@ func (c *Conduit) section(u units.System) (pipeflow.Section, error) {
 		s, err = pipeflow.NewTrapezoid(bottom, left, right)
 	}
 	if err != nil {
-		return nil, refuse(plainError(err), "see the page of `rimfall manning --help` for the dimensions of each shape")
+		return nil, refusePlain(err, "give dimensions over 0")
 	}
 	return s, nil
 }
@@ -95,7 +95,7 @@ func (c *Conduit) pipe(u units.System) (pipeflow.Section, error) {
 	if c.Haunch > 0 {
 		s, err := pipeflow.NewHaunchedBox(c.Size.Span/u.SizeFactor, c.Size.Rise/u.SizeFactor, c.Haunch/u.SizeFactor)
 		if err != nil {
-			return nil, refuse(plainError(err), "give a haunch under half the span and half the rise")
+			return nil, refusePlain(err, "give a haunch under half the span and half the rise")
 		}
 		return s, nil
 	}

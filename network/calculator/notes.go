@@ -94,6 +94,6 @@ func (a *Answer) noteState() {
 		a.add("There is no critical depth below the roof: the flow would need more than the rise and is rapid at every depth.")
 	}
 	if ratio := a.First.Ratio; ratio.OK && ratio.V < 1 && a.First.Flow > a.First.FullFlow.V*(1+sameLength) && a.Second == nil {
-		a.add("The flow is over the full-bore capacity, %s; designs do not count on more than that.", a.say(Discharge, a.First.FullFlow.V))
+		a.add("The flow is over the full-bore capacity, %s: where the water touches the roof, it fills the pipe. Designs count on the full-bore capacity only.", a.say(Discharge, a.First.FullFlow.V))
 	}
 }

@@ -153,7 +153,7 @@ func (q *Question) tooMuchOpen(open, state []string) error {
 	case len(open) == 1:
 		return refuse(wrong, "give two of depth, flow and velocity to find "+open[0]+", or give "+open[0])
 	}
-	return refuse(wrong, "one may stay open: give "+list(unknown, "or")+", as many as leave one")
+	return refuse(wrong, "give "+number(len(unknown)-1)+" of them, and the last is found")
 }
 
 // number is a count in words.
@@ -205,6 +205,16 @@ func (q *Question) refuseSlope() error {
 
 // refuse is a question without an answer: what stands in the way, what would do.
 func refuse(wrong, remedy string) error { return &pipeflow.NoAnswer{Wrong: wrong, Remedy: remedy} }
+
+// refusePlain is an error of package pipeflow as a refusal. Where its text has a remedy
+// behind a semicolon that one holds.
+func refusePlain(err error, remedy string) error {
+	wrong, own, found := strings.Cut(plainError(err), "; ")
+	if found {
+		remedy = own
+	}
+	return refuse(wrong, remedy)
+}
 
 // plainError is the text of an error of package pipeflow without its name.
 func plainError(err error) string { return strings.TrimPrefix(err.Error(), "pipeflow: ") }

@@ -173,7 +173,7 @@ func (g *Given) foreign(shape string) error {
 		given bool
 	}{{Size, g.Size != ""}, {Bottom, g.Bottom != ""}, {Side, g.Side != "" || g.SideRight != ""}, {"haunch", g.Haunch != ""}, {Ground, len(g.Points) > 0}} {
 		if d.given && !slices.Contains(own, d.name) {
-			return refuse(fmt.Sprintf("the shape %s has no %s", shape, d.name), fmt.Sprintf("its dimensions are %s; or name another shape", list(own, "and")))
+			return refuse(fmt.Sprintf("the shape %s has no %s", shape, d.name), fmt.Sprintf("it takes %s: leave out %s, or name another shape", list(own, "and"), d.name))
 		}
 	}
 	if shape == Ground && len(g.Points) == 0 {

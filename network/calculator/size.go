@@ -1,8 +1,10 @@
 package calculator
 
 import (
+	"cmp"
 	"fmt"
 	"math"
+	"slices"
 
 	"rimfall/network"
 	"rimfall/pipeflow"
@@ -16,7 +18,7 @@ func (a *Answer) findSize() error {
 	if err := a.judgeSizeQuestion(); err != nil {
 		return err
 	}
-	rows := catalog.ForMaterial(a.Units.Name, a.Conduit.Material, catalog.Shape(a.Conduit.Shape))
+	rows := a.candidates()
 	if len(rows) == 0 {
 		return refuse(fmt.Sprintf("no %s of %s is listed, so there are no sizes to choose from", a.Conduit.Shape, a.Conduit.Material),
 			"give the size, or another material; `rimfall sizes` prints what is listed")
@@ -55,6 +57,21 @@ func (a *Answer) judgeSizeQuestion() error {
 		return refuse("the size for a velocity is sought at a share of the rise, not at a depth", "write the depth as 0.8D or full")
 	}
 	return nil
+}
+
+// candidates are the listed sizes of shape and material by full area, the order in which
+// a job's sizes are chosen too.
+func (a *Answer) candidates() []catalog.Size {
+	rows := catalog.ForMaterial(a.Units.Name, a.Conduit.Material, catalog.Shape(a.Conduit.Shape))
+	area := func(row catalog.Size) float64 {
+		s, err := row.Section()
+		if err != nil {
+			return math.Inf(1)
+		}
+		return s.At(s.Rise()).Area
+	}
+	slices.SortStableFunc(rows, func(x, y catalog.Size) int { return cmp.Compare(area(x), area(y)) })
+	return rows
 }
 
 // smallest is the first row that answers; where none does, the largest row.
@@ -143,7 +160,7 @@ func (a *Answer) stateInSize(listed bool) error {
 
 // nextSize is the smallest listed size that carries the flow full at the slope.
 func (a *Answer) nextSize() (catalog.Size, bool) {
-	rows := catalog.ForMaterial(a.Units.Name, a.Conduit.Material, catalog.Shape(a.Conduit.Shape))
+	rows := a.candidates()
 	if len(rows) == 0 {
 		return catalog.Size{}, false
 	}
