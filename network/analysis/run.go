@@ -56,10 +56,16 @@ func Run(j *job.Job, o Options) (*Result, error) {
 	}
 	var choose sweep.Chooser
 	var chooser *size.Chooser
+	var larger enlargement
 	if o.Size {
 		r.Network = j.Network.Clone()
-		chooser = size.New(r.Network, &j.Settings.Criteria, j.Settings.Units, storm.ManningFactor, Candidates(j))
+		candidates := Candidates(j)
+		chooser = size.New(r.Network, &j.Settings.Criteria, j.Settings.Units, storm.ManningFactor, candidates)
 		choose = chooser
+		if j.Settings.Criteria.SizeFor == network.ForGradeLine {
+			larger = enlarge(j, storm, candidates)
+			chooser.AtLeast = larger.atLeast
+		}
 	}
 	design, err := runStorm(j, r.Network, storm, choose)
 	if err != nil {
@@ -76,7 +82,7 @@ func Run(j *job.Job, o Options) (*Result, error) {
 		r.Check = &run
 		r.Check.Lines = grade.Up(r.Network, gradeSettings(j), &r.Check.Flows, grade.CheckTailwater)
 	}
-	r.Findings = judge(r, chooser)
+	r.Findings = judge(r, chooser, larger)
 	return r, nil
 }
 
@@ -119,11 +125,11 @@ func Candidates(j *job.Job) func(shape, material string) []size.Candidate {
 func fullArea(c size.Candidate) float64 { return c.Section.At(c.Section.Rise()).Area }
 
 // judge applies the rules to the design storm and the departures to what they find.
-func judge(r *Result, chooser *size.Chooser) []finding.Finding {
+func judge(r *Result, chooser *size.Chooser, larger enlargement) []finding.Finding {
 	s := &r.Job.Settings
 	run := finding.Run{
 		Network: r.Network, Criteria: &s.Criteria, Storm: &r.Design.Storm, Units: s.Units, FlowUnit: s.FlowUnit, Flows: &r.Design.Flows,
-		Lines: r.Design.Lines,
+		Lines: r.Design.Lines, Growth: larger.growth, Uncured: larger.uncured,
 	}
 	if c := r.Check; c != nil {
 		run.Check = &finding.StormLines{Storm: &c.Storm, Flows: &c.Flows, Lines: c.Lines, Tailwater: grade.CheckTailwater}

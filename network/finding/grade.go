@@ -130,7 +130,7 @@ func (j *judge) freeboard() {
 	limit := j.Criteria.Freeboard
 	j.eachLevel(func(s *StormLines, i network.StructureIndex, given *network.Structure, at *grade.Structure) {
 		free := at.Freeboard(given)
-		if !free.OK || free.V >= limit-levelRoom {
+		if !BreaksFreeboard(free, limit) {
 			return
 		}
 		where := "rim is " + j.length(free.V) + " above the grade line"
@@ -139,6 +139,11 @@ func (j *judge) freeboard() {
 		}
 		j.addIn(s, "freeboard", given.ID, free, network.Some(limit), "the %s; %s of freeboard is asked%s", where, j.length(limit), j.cure(s, i))
 	})
+}
+
+// BreaksFreeboard tells whether a freeboard is under its limit; not where it is not known.
+func BreaksFreeboard(free network.Maybe, limit float64) bool {
+	return free.OK && free.V < limit-levelRoom
 }
 
 // cure tells what could be done about a lack of freeboard in the design storm.
@@ -241,14 +246,22 @@ func (j *judge) lineUnknown() {
 func (j *judge) gradeLineSize() {
 	for _, g := range j.Growth {
 		p := &j.Network.Pipes[g.Pipe]
-		j.add("grade-line-size", p.ID, network.Some(p.Size.Rise), network.Some(g.Rise), "the rise grew from %s to %s %s so that the grade line at structure %s sinks",
-			num(g.Rise, 0), num(p.Size.Rise, 0), j.Units.Size, j.id(g.For))
+		j.add("grade-line-size", p.ID, network.Some(p.Size.Rise), network.Some(g.From.Rise), "the size grew from %s to %s %s to lower the grade line at structure %s",
+			sizeWord(g.From), sizeWord(p.Size), j.Units.Size, j.id(g.For))
 	}
+}
+
+// sizeWord is a rise, or span and rise where they differ.
+func sizeWord(s network.Size) string {
+	if s.Span == s.Rise {
+		return num(s.Rise, 0)
+	}
+	return num(s.Span, 0) + "x" + num(s.Rise, 0)
 }
 
 // Growth is a pipe that was enlarged for the sake of the freeboard.
 type Growth struct {
 	Pipe network.PipeIndex
-	Rise float64 // that it had for its flow alone, in size units
+	From network.Size // that it had for its flow alone
 	For  network.StructureIndex
 }

@@ -25,6 +25,9 @@ type Chooser struct {
 	// Candidates lists the sizes of a shape and material, ascending by area.
 	Candidates func(shape, material string) []Candidate
 
+	// AtLeast is a full area of all barrels, by pipe, under which no size is chosen, beside the other limits; nil: none.
+	AtLeast []float64
+
 	given   []network.Pipe // as they were before anything was chosen
 	step    step
 	remarks []Remark
@@ -69,6 +72,9 @@ func (c *Chooser) Choose(i network.PipeIndex, flow float64) {
 	}
 	all := c.Candidates(p.Shape, p.Material)
 	least := c.leastArea(p)
+	if c.AtLeast != nil {
+		least = max(least, c.AtLeast[i])
+	}
 	var last trial
 	for k, candidate := range all {
 		isLast := k == len(all)-1
