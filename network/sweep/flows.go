@@ -36,6 +36,7 @@ type Pipe struct {
 	Depth       float64 // normal depth; the rise where over capacity; none where Full by adverse slope
 	Velocity    float64 // at that depth; none where Dry
 	TravelTime  float64 // min
+	Part        bool    // by partial area, a time shorter than the longest governs
 	BelowFirst  bool    // the time is shorter than the first duration of the rainfall
 }
 
@@ -50,6 +51,7 @@ type Structure struct {
 	Time, Intensity  float64 // that govern; the minimum time where CA is 0
 	Flow             float64 // factor·CACounted·i + inflow
 	BelowFirst       bool
+	Part             bool // by partial area, a time shorter than the longest governs
 	Beyond           bool // the time is beyond the rainfall: there is no flow
 }
 

@@ -17,15 +17,11 @@ type Chooser interface {
 // as they are reached. The problems are structures at which the time is beyond
 // the rainfall; where there are any, the flows mean nothing.
 func Down(n *network.Network, storm *network.Storm, rain hydrology.Intensity, choose Chooser) (Flows, []network.Problem) {
-	order, _ := n.Order()
 	d := pass{n: n, storm: storm, rain: rain, flows: newFlows(n), frequency: 1}
 	if storm.FrequencyFactor {
 		d.frequency = hydrology.FrequencyFactor(storm.ReturnPeriod)
 	}
-	if storm.Peak == network.PartialArea {
-		d.arrivals = make(arrivals, len(n.Pipes))
-	}
-	for _, s := range order {
+	for _, s := range d.order() {
 		d.gather(s)
 		d.peak(s)
 		out := n.PipesOut(s)
@@ -40,8 +36,21 @@ func Down(n *network.Network, storm *network.Storm, rain hydrology.Intensity, ch
 				d.sendArrivals(p, n.Pipes[p].Share.Or(1), k == len(out)-1)
 			}
 		}
+		if d.arrivals != nil && len(out) == 0 {
+			d.arrivals.release(d.reached)
+		}
 	}
-	return d.flows, d.problems()
+	return d.flows, append(d.problems(), d.multiplied...)
+}
+
+// order is the order of the pass; with peaks by partial area it goes down branch by branch.
+func (d *pass) order() []network.StructureIndex {
+	if d.storm.Peak == network.PartialArea {
+		d.arrivals, d.partial = newArrivals(len(d.n.Pipes)), newStorm(d.rain, d.storm.MinimumTime)
+		return depthFirst(d.n)
+	}
+	order, _ := d.n.Order()
+	return order
 }
 
 // pass is one pass on its way down.
@@ -52,8 +61,10 @@ type pass struct {
 	flows     Flows
 	frequency float64 // Cf on every runoff coefficient
 
-	arrivals arrivals                 // nil with longest-time peaks
-	reached  []hydrology.Contribution // at the structure in hand
+	arrivals   *arrivals         // nil with longest-time peaks; what follows is for the others
+	partial    storm             // as the search sees it
+	reached    list              // at the structure in hand
+	multiplied []network.Problem // structures that areas reach over too many ways
 }
 
 // Coefficient is C·Cf of an area, not over 1.
@@ -103,6 +114,7 @@ func (d *pass) enter(s network.StructureIndex, p network.PipeIndex) {
 	share := d.n.Pipes[p].Share.Or(1)
 	out.Area, out.CA, out.Inflow = share*at.Area, share*at.CA, share*at.Inflow
 	out.Time, out.Intensity, out.BelowFirst = at.Time, at.Intensity, at.BelowFirst
+	out.Part = at.Part
 	out.CACounted = share * at.CACounted
 	out.Flow = out.Inflow + hydrology.Rational(d.storm.RationalFactor, out.CACounted, out.Intensity)
 	if d.storm.HoldUpstreamPeak {
