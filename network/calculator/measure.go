@@ -96,9 +96,9 @@ func figure(v float64) string {
 
 // short shows a given number as it was written, free of the rounding of a conversion.
 func short(v float64) string {
-	tidy, err := strconv.ParseFloat(strconv.FormatFloat(v, 'g', 10, 64), 64)
+	rounded, err := strconv.ParseFloat(strconv.FormatFloat(v, 'g', 10, 64), 64)
 	if err != nil {
-		tidy = v
+		rounded = v
 	}
-	return strconv.FormatFloat(tidy, 'f', -1, 64)
+	return strconv.FormatFloat(rounded, 'f', -1, 64)
 }

@@ -66,12 +66,22 @@ func (q quantity) read(text string, u units.System) (network.Maybe, error) {
 	case unit == "" || unit == own:
 		return network.Some(v), nil
 	case ok:
-		return network.Some(v * per / q.known[own]), nil
+		return network.Some(tidy(v * per / q.known[own])), nil
 	case len(q.known) == 0:
 		return network.Maybe{}, q.noNumber(text)
 	}
 	return network.Maybe{}, refuse(fmt.Sprintf("%s %q: unknown unit %q", q.name, text, unit),
 		fmt.Sprintf("leave it out for %s, or write one of %s", own, list(slices.Sorted(maps.Keys(q.known)), "and")))
+}
+
+// tidy takes off the rounding of a conversion: 350 L/s are 0.35 m³/s. Fifteen digits are
+// what a floating-point number holds for certain.
+func tidy(v float64) float64 {
+	rounded, err := strconv.ParseFloat(strconv.FormatFloat(v, 'g', 15, 64), 64)
+	if err != nil {
+		return v
+	}
+	return rounded
 }
 
 func (q quantity) noNumber(text string) error {
