@@ -49,7 +49,7 @@ func Plan(result *analysis.Result, o PlanOptions) (Sheet, PlanNotes, error) {
 		return Sheet{}, PlanNotes{}, ErrNoCoordinates
 	}
 	p := &plan{sheet: newSheet(o.Paper, "Plan of "+r.Job.Settings.Title), r: r}
-	p.marks = marksOf(r)
+	p.marks = r.marks
 	p.fitIn(extent)
 	p.spans()
 	p.draw()

@@ -3,6 +3,7 @@ package drawing
 import (
 	"math"
 	"strconv"
+	"strings"
 
 	"rimfall/network"
 	"rimfall/network/finding"
@@ -49,6 +50,19 @@ func marksOf(r *run) []mark {
 		add(r.Network.Pipes[i].ID, mark{pipe: network.PipeIndex(i), isPipe: true})
 	}
 	return marks
+}
+
+// names is the subject with the names of the rules, and the storm where it is not the design storm.
+func (m *mark) names(r *run) string {
+	var names []string
+	for _, f := range m.findings {
+		name := f.Rule.Name
+		if f.Storm != r.Design.Storm.ReturnPeriod {
+			name += " (" + strconv.FormatFloat(f.Storm, 'g', -1, 64) + " years)"
+		}
+		names = append(names, name)
+	}
+	return m.subject + ": " + strings.Join(names, ", ")
 }
 
 const markRadius = 1.75

@@ -94,10 +94,9 @@ func (p *plan) pipeNames() {
 		}
 		width := p.penOfSpan(given.Size.Span).Width
 		gap := max(width/2, slimHead*headLength(width)) + 0.2 // off the arrow head as well
-		spots := append(alongSpots(from, to, gap, full), alongSpots(from, to, gap, given.ID)...)
 		middle := Point{(from.X + to.X) / 2, (from.Y + to.Y) / 2}
-		spots = append(spots, aroundSpots(middle, gap, []Label{{Text: given.ID, Size: smallType}})...)
-		chosen, ok := p.place.choose(spots)
+		chosen, ok := p.place.choose(alongSpots(from, to, gap, full), alongSpots(from, to, gap, given.ID),
+			aroundSpots(middle, gap, []Label{{Text: given.ID, Size: smallType}}))
 		if !ok {
 			p.notes.NoRoom++
 			continue

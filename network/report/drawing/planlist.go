@@ -2,14 +2,13 @@ package drawing
 
 import (
 	"fmt"
-	"strconv"
-	"strings"
 )
 
 // entry is one number of the list of findings with its lines.
 type entry struct {
 	mark  *mark
 	lines []string
+	gap   float64 // under it
 }
 
 // The list of findings: room to the left of its text, and the heights of its lines, mm.
@@ -17,6 +16,7 @@ const (
 	listIndent = 7.0
 	listStep   = 3.2
 	listGap    = 0.9
+	closeGap   = 0.25 // where the list is long
 )
 
 // findingList writes what the numbers mean: in full where there is room for all, else the names of the rules, as many as
@@ -30,8 +30,15 @@ func (p *plan) findingList() {
 	p.Text(Label{At: Point{left + 2.5, p.body.Top + 5.5}, Size: 3.2, Bold: true, Text: "Findings"})
 	room := p.body.height() - 8 - 6
 	list := p.entries(p.inFull)
+	for _, shorter := range []func(*mark) []string{p.errorsInFull, p.byName} {
+		if height(list) > room {
+			list = p.entries(shorter)
+		}
+	}
 	if height(list) > room {
-		list = p.entries(p.byName)
+		for i := range list {
+			list[i].gap = closeGap
+		}
 	}
 	y, bottom := p.body.Top+8, p.body.Top+8+room
 	for i, e := range list {
@@ -47,7 +54,7 @@ func (p *plan) findingList() {
 	}
 }
 
-func (e *entry) height() float64 { return max(2*markRadius, float64(len(e.lines))*listStep) + listGap }
+func (e *entry) height() float64 { return max(2*markRadius, float64(len(e.lines))*listStep) + e.gap }
 
 func height(list []entry) float64 {
 	sum := 0.0
@@ -61,7 +68,7 @@ func height(list []entry) float64 {
 func (p *plan) entries(say func(*mark) []string) []entry {
 	list := make([]entry, len(p.marks))
 	for i := range p.marks {
-		list[i] = entry{&p.marks[i], say(&p.marks[i])}
+		list[i] = entry{&p.marks[i], say(&p.marks[i]), listGap}
 	}
 	return list
 }
@@ -71,22 +78,34 @@ const listWidth = findingsWidth - listIndent - 2
 
 // inFull is the subject, then every finding with its message.
 func (p *plan) inFull(m *mark) []string {
-	lines := []string{Shorten(m.subject, smallType, listWidth, false)}
+	lines := []string{Shorten(m.subject+p.missing(m), smallType, listWidth, true)}
 	for _, f := range m.findings {
 		lines = append(lines, wrap(f.Rule.Title+": "+f.Message, smallType, listWidth)...)
 	}
 	return lines
 }
 
+// errorsInFull spares the messages of what only warns.
+func (p *plan) errorsInFull(m *mark) []string {
+	if m.breaks {
+		return p.inFull(m)
+	}
+	return p.byName(m)
+}
+
+// missing says of a subject without coordinates that its number is not on the drawing.
+func (p *plan) missing(m *mark) string {
+	_, ok := p.at(m.structure)
+	if m.isPipe {
+		_, _, ok = p.ends(m.pipe)
+	}
+	if ok {
+		return ""
+	}
+	return " (not on the plan)"
+}
+
 // byName is one line: the subject and the names of the rules, with the storm where it is not the design storm.
 func (p *plan) byName(m *mark) []string {
-	var names []string
-	for _, f := range m.findings {
-		name := f.Rule.Name
-		if f.Storm != p.r.Design.Storm.ReturnPeriod {
-			name += " (" + strconv.FormatFloat(f.Storm, 'g', -1, 64) + " years)"
-		}
-		names = append(names, name)
-	}
-	return []string{Shorten(m.subject+": "+strings.Join(names, ", "), smallType, listWidth, false)}
+	return []string{Shorten(m.names(p.r)+p.missing(m), smallType, listWidth, false)}
 }

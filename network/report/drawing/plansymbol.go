@@ -64,8 +64,7 @@ func (p *plan) flowHead(from, to Point, width float64) {
 	base := Point{tip.X - head*ux, tip.Y - head*uy}
 	points := []Point{tip, {base.X - half*uy, base.Y + half*ux}, {base.X + half*uy, base.Y - half*ux}}
 	p.Polygon(points, Pen{Width: 0.1}, Black)
-	b := Box{tip.X, tip.Y, tip.X, tip.Y}
-	p.place.take(b.with(points[1]).with(points[2]))
+	p.place.takeLine(base, tip, 2*half)
 }
 
 // structure draws the sign of a structure; one without coordinates is noted.

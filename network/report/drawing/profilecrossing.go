@@ -31,8 +31,6 @@ func (g *graph) crossingNames() {
 		if gap := g.r.Network.Clearance(c); gap.OK {
 			second = fmt.Sprintf("%s; gap %s", second, g.r.style.Show(report.Length, report.M(gap)))
 		}
-		if s, ok := g.place.choose(besideSpots(centre, rx+0.2, c.Name, second, c.Name)); ok {
-			g.called(s)
-		}
+		g.call(centre, rx+0.2, c.Name, second, c.Name)
 	})
 }

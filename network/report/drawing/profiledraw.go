@@ -2,6 +2,7 @@ package drawing
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 )
 
@@ -142,10 +143,27 @@ func (s *profileSheet) finish(i, of int) {
 			fmt.Sprintf("Grid %g %s by %g %s; levels over the datum of the job", station, s.r.units.Length, level, s.r.units.Length),
 		},
 		notes: []string{
+			s.findings(),
 			"Inverts at the structures' centres; stations run upgrade from the lower end. Pipes and structures are to scale upright; the width of structures is a sign.",
 		},
 		count: fmt.Sprintf("sheet %d of %d", i+1, of),
 	})
+}
+
+// findings names the errors and warnings about what stands on the sheet.
+func (s *profileSheet) findings() string {
+	structures, pipes := s.line.structures[s.part.first:s.part.last+1], s.line.pipes[s.part.first:s.part.last]
+	var names []string
+	for i := range s.r.marks {
+		m := &s.r.marks[i]
+		if m.isPipe && slices.Contains(pipes, m.pipe) || !m.isPipe && slices.Contains(structures, m.structure) {
+			names = append(names, m.names(s.r))
+		}
+	}
+	if len(names) == 0 {
+		return "No errors and no warnings on this sheet."
+	}
+	return "Findings here: " + strings.Join(names, "; ") + "."
 }
 
 // samples is the legend of what stands on the sheet.
@@ -161,8 +179,8 @@ func (s *profileSheet) samples() []sample {
 			continue
 		}
 		list = append(list,
-			s.penSample(penOf(hydraulic, storm), "hydraulic grade, "+storm.years()),
-			s.penSample(penOf(energy, storm), "energy grade, "+storm.years()))
+			s.penSample(penOf(hydraulic, storm), "hydraulic grade line, "+storm.years()),
+			s.penSample(penOf(energy, storm), "energy grade line, "+storm.years()))
 	}
 	list = append(list, s.pipeSample(proposedPipe, "pipe, proposed"), s.pipeSample(existingPipe, "pipe, existing"))
 	list = append(list, sample{func(b Box) {

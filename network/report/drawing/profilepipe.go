@@ -92,15 +92,15 @@ func (g *graph) pipeNames() {
 		size := sizeText(p, g.r.units.Size)
 		slope := style.Show(report.Percent, report.M(p.Slope)) + " %"
 		length := style.Show(report.Length, report.N(p.Length)) + " " + g.r.units.Length
-		var spots []spot
+		var groups [][]spot
 		for _, text := range []string{
 			fmt.Sprintf("%s: %s %s, %s at %s", p.ID, size, p.Material, length, slope),
 			fmt.Sprintf("%s: %s at %s", p.ID, size, slope),
 			fmt.Sprintf("%s: %s", p.ID, size), p.ID,
 		} {
-			spots = append(spots, d.along(text)...)
+			groups = append(groups, d.along(text))
 		}
-		if s, ok := g.place.choose(spots); ok {
+		if s, ok := g.place.choose(groups...); ok {
 			g.Text(s.labels[0])
 		}
 	}

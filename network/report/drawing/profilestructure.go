@@ -153,45 +153,43 @@ func (g *graph) openingNames() {
 			full := e.pipe.ID + ", " + sizeText(e.pipe, g.r.units.Size) + " " + direction
 			level := "invert " + g.r.style.Show(report.Level, report.M(invert))
 			middle := Point{x, g.y(invert.V + e.pipe.Section.Rise()/2)}
-			if s, ok := g.place.choose(besideSpots(middle, half+0.3, full, level, e.pipe.ID)); ok {
-				g.called(s)
-			}
+			g.call(middle, half+0.3, full, level, e.pipe.ID)
 		}
 	}
 }
 
-// besideSpots are places for a text of two lines, or a short one, beside a point: close to it, then farther out.
-func besideSpots(at Point, gap float64, first, second, short string) []spot {
+// besideSpots are places for lines of text beside a point: close to it, then farther out.
+func besideSpots(at Point, gap float64, texts ...string) []spot {
 	const step = 3.0
 	var spots []spot
-	add := func(texts []string, size float64) {
-		for _, out := range [...]float64{5, 9, 14, 20} {
-			for _, rise := range [...]float64{0, 4, -4, 8, -8, 12, -12, 18, -18} {
-				for _, right := range [...]bool{true, false} {
-					s := spot{leader: true, at: at}
-					for i, text := range texts {
-						l := Label{At: Point{at.X + gap + out, at.Y + rise + 0.9 + float64(i)*step}, Size: size, Text: text}
-						if !right {
-							l.At.X, l.Anchor = at.X-gap-out, End
-						}
-						s.labels = append(s.labels, l)
+	for _, out := range [...]float64{5, 9, 14, 20} {
+		for _, rise := range [...]float64{0, 4, -4, 8, -8, 12, -12, 18, -18} {
+			for _, right := range [...]bool{true, false} {
+				s := spot{leader: true, at: at}
+				for i, text := range texts {
+					l := Label{At: Point{at.X + gap + out, at.Y + rise + 0.9 + float64(i)*step}, Size: smallType, Text: text}
+					if !right {
+						l.At.X, l.Anchor = at.X-gap-out, End
 					}
-					spots = append(spots, s)
+					s.labels = append(s.labels, l)
 				}
+				spots = append(spots, s)
 			}
 		}
 	}
-	add([]string{first, second}, smallType)
-	add([]string{short}, smallType)
 	return spots
 }
 
-// called writes a label beside a point and leads a thin line to it.
-func (s *sheet) called(chosen spot) {
+// call writes two lines beside a point, or where these have no room a short one, and leads a thin line to it.
+func (g *graph) call(at Point, gap float64, first, second, short string) {
+	chosen, ok := g.place.choose(besideSpots(at, gap, first, second), besideSpots(at, gap, short))
+	if !ok {
+		return // the table, or the sheet of the other line, has it
+	}
 	for _, l := range chosen.labels {
 		l.Halo = true
-		s.Text(l)
+		g.Text(l)
 	}
-	s.Line(chosen.from(), chosen.at, leader)
-	s.Ellipse(chosen.at, 0.3, 0.3, noEdge, Black)
+	g.Line(chosen.from(), chosen.at, leader)
+	g.Ellipse(chosen.at, 0.3, 0.3, noEdge, Black)
 }

@@ -101,10 +101,7 @@ func (g *graph) receivingNames() {
 		at := Point{x - 10, g.y(v.V)}
 		name := fmt.Sprintf("tailwater, %s", s.years())
 		level := g.r.style.Show(report.Level, report.M(v))
-		spots := besideSpots(at, 2, name, level, name)
-		if chosen, ok := g.place.choose(spots); ok {
-			g.called(chosen)
-		}
+		g.call(at, 2, name, level, name)
 	}
 }
 
@@ -122,9 +119,7 @@ func (g *graph) jumps() {
 			name := "jump, " + s.years()
 			where := fmt.Sprintf("%s above %s", g.r.style.Show(report.Length, report.M(s.lines.Pipes[g.line.pipes[k]].Jump))+" "+g.r.units.Length,
 				g.r.Network.Structures[g.line.structures[k]].ID)
-			if chosen, ok := g.place.choose(besideSpots(middle, 0.5, name, where, "jump")); ok {
-				g.called(chosen)
-			}
+			g.call(middle, 0.5, name, where, "jump")
 		}
 	}
 }

@@ -17,6 +17,7 @@ type run struct {
 	style     report.Style
 	storms    []storm // the design storm and, where there is one, the check storm
 	crossings map[network.PipeIndex][]*network.Crossing
+	marks     []mark // of the findings
 }
 
 func newRun(r *analysis.Result) *run {
@@ -31,6 +32,7 @@ func newRun(r *analysis.Result) *run {
 		c := &r.Network.Crossings[i]
 		a.crossings[c.Pipe] = append(a.crossings[c.Pipe], c)
 	}
+	a.marks = marksOf(a)
 	return a
 }
 

@@ -1,8 +1,6 @@
 package drawing
 
 import (
-	"fmt"
-
 	"rimfall/network/report"
 	"rimfall/network/units"
 )
@@ -148,21 +146,23 @@ func (s *sheet) signatures(box Box, count string) {
 	s.Text(fit(Label{At: Point{centre, box.Bottom - 2.6}, Size: typeSize, Anchor: Middle, Bold: true, Text: count}, width-2, 1.8))
 }
 
-// notes writes the notes, as many lines as there is room for; the cautions come last and always have room.
+// notes writes the notes. Where there is no room for all, the first gives way: it is the list of findings, which the
+// tables have as well.
 func (s *sheet) notes(notes []string) {
 	box := s.notesBox()
 	s.Line(Point{box.Left, box.Top}, Point{box.Left, box.Bottom}, medium)
-	const margin, size, step = 2.5, smallType, 3.1
-	var lines []string
-	for _, n := range notes {
-		lines = append(lines, wrap(n, size, box.width()-2*margin)...)
+	const margin, step = 2.5, 3.1
+	width := box.width() - 2*margin
+	first := wrap(notes[0], smallType, width)
+	var rest []string
+	for _, n := range notes[1:] {
+		rest = append(rest, wrap(n, smallType, width)...)
 	}
-	room := int((box.height() - 3) / step)
-	if surplus := len(lines) - room; surplus > 0 { // the first notes give way to the cautions
-		lines = append([]string{fmt.Sprintf("(%d lines of notes have no room here)", surplus+1)}, lines[surplus+1:]...)
+	if room := int((box.height()-3)/step) - len(rest); len(first) > room {
+		first = append(first[:room-1], "… and more; see the table of findings")
 	}
-	for i, l := range lines {
-		s.words(box.Left+margin, box.Top+4+float64(i)*step, size, l)
+	for i, l := range append(first, rest...) {
+		s.words(box.Left+margin, box.Top+4+float64(i)*step, smallType, l)
 	}
 }
 

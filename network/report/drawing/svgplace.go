@@ -176,27 +176,35 @@ func (p *placer) leads(s *spot) bool {
 	return true
 }
 
-// choose takes, of the spots that are free, the one that crosses the fewest lines, an earlier one before a later one. ok
-// is false where none is free.
-func (p *placer) choose(spots []spot) (chosen spot, ok bool) {
-	best := math.MaxInt
+// choose takes a spot of the first group that has a free one: of that group, the one that crosses the fewest lines, an
+// earlier one before a later one. ok is false where none is free.
+func (p *placer) choose(groups ...[]spot) (chosen spot, ok bool) {
+	for _, spots := range groups {
+		if s := p.best(spots); s != nil {
+			p.write(s)
+			return *s, true
+		}
+	}
+	return spot{}, false
+}
+
+// best is the free spot that crosses the fewest lines; nil where none is free.
+func (p *placer) best(spots []spot) (best *spot) {
+	fewest := math.MaxInt
 	for i := range spots {
 		s := &spots[i]
 		shapes := s.shapes()
 		if !p.free(shapes) || !p.leads(s) {
 			continue
 		}
-		if n := p.crossed(shapes); n < best {
-			chosen, best, ok = *s, n, true
+		if n := p.crossed(shapes); n < fewest {
+			best, fewest = s, n
 		}
-		if best == 0 {
+		if fewest == 0 {
 			break
 		}
 	}
-	if ok {
-		p.write(&chosen)
-	}
-	return chosen, ok
+	return best
 }
 
 // write marks the room of a spot as taken.
