@@ -31,9 +31,10 @@ func (a *app) manningCommand() *cobra.Command {
 	cmd := &cobra.Command{
 		Use:   "manning",
 		Short: "Solve Manning's equation for whatever is left out",
-		Long: `manning finds the one thing that is not given: of section, n, slope, depth, flow and
-velocity leave out one, and of the last three two (any of them gives the others). It prints the
-working in the order of a hand calculation, then the answer; two answers where there are two.
+		Long: `manning finds what is left out. With section, n and slope given, one of depth, flow and
+velocity gives the other two; with one of section, n and slope left out, two of depth, flow and
+velocity give it. The working is printed in the order of a hand calculation, then the answer: both
+where there are two, and why where there is none.
 
 Dimensions of the shapes:
   circle                        --size 24
@@ -63,6 +64,7 @@ One value may be a list: --depth 0.1D:0.9D:0.1D (from:to:step), --size 18,24,30.
 	complete(cmd, "shape", calculator.Shapes())
 	complete(cmd, "format", formats)
 	complete(cmd, "units", []string{units.US.Name, units.SI.Name})
+	complete(cmd, "material", materialWords())
 	complete(cmd, "composite", []string{calculator.Horton, calculator.Lotter})
 	return cmd
 }
@@ -71,21 +73,21 @@ One value may be a list: --depth 0.1D:0.9D:0.1D (from:to:step), --size 18,24,30.
 func (m *manningFlags) addTo(f *pflag.FlagSet) {
 	g := &m.given
 	f.SortFlags = false
-	f.StringVar(&g.Shape, "shape", "", "shape (circle unless a ground line is given): "+strings.Join(calculator.Shapes(), ", "))
-	f.StringVar(&g.Size, "size", "", "diameter, or span x rise")
-	f.StringVar(&g.Haunch, "haunch", "", "leg of the filled corners of a box")
-	f.StringVar(&g.Bottom, "bottom", "", "bottom width of a channel")
-	f.StringVar(&g.Side, "side", "", "side slope of a channel, horizontal for 1 vertical")
-	f.StringVar(&g.SideRight, "side-right", "", "right side, where it differs from the left")
+	f.StringVar(&g.Shape, "shape", "", "`SHAPE`, circle unless a ground line is given: "+strings.Join(calculator.Shapes(), ", "))
+	f.StringVar(&g.Size, "size", "", "diameter, or span x rise: `SIZE`")
+	f.StringVar(&g.Haunch, "haunch", "", "leg of the filled corners of a box: `SIZE`")
+	f.StringVar(&g.Bottom, "bottom", "", "bottom `WIDTH` of a channel")
+	f.StringVar(&g.Side, "side", "", "side slope of a channel: its `RUN` for a rise of 1")
+	f.StringVar(&g.SideRight, "side-right", "", "`RUN` of the right side, where it differs from the left")
 	f.StringVar(&m.ground, "ground", "", "cross-section from a CSV `FILE`: station, elevation, n up to the next point")
-	f.StringVar(&g.N, "n", "", "roughness")
-	f.StringVar(&g.Material, "material", "", "pipe material: gives n and the list of sizes (see `rimfall sizes --materials`)")
-	f.StringVar(&g.Slope, "slope", "", "slope as rise over run, or percent with a % sign")
-	f.StringVar(&g.Depth, "depth", "", "depth, a share of the rise as 0.8D, or full")
-	f.StringVar(&g.Flow, "flow", "", "flow")
-	f.StringVar(&g.Velocity, "velocity", "", "mean velocity")
+	f.StringVar(&g.N, "n", "", "roughness `N`")
+	f.StringVar(&g.Material, "material", "", "pipe material `NAME`: gives n and the list of sizes, see rimfall sizes --materials")
+	f.StringVar(&g.Slope, "slope", "", "`SLOPE` as rise over run, or percent with a % sign")
+	f.StringVar(&g.Depth, "depth", "", "`DEPTH`, a share of the rise as 0.8D, or full")
+	f.StringVar(&g.Flow, "flow", "", "`FLOW`")
+	f.StringVar(&g.Velocity, "velocity", "", "mean `VELOCITY`")
 	f.BoolVar(&g.VaryingN, "varying-n", false, "let n of a pipe vary with depth")
-	f.StringVar(&g.Composite, "composite", "", "how the n of a ground line are joined: horton (default), lotter")
+	f.StringVar(&g.Composite, "composite", "", "`RULE` by which the n of a ground line are joined: horton (default), lotter")
 	f.BoolVar(&m.table, "table", false, "print the rating of the section: what it holds and carries at each depth")
 	f.StringVar(&m.svg, "plot", "", "draw section, water line and hydraulic elements into `FILE.svg`")
 	f.BoolVar(&m.force, "force", false, "replace the file of --plot where it exists")

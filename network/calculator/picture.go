@@ -100,7 +100,9 @@ func (a *Answer) givenLine() string {
 	add(a.Conduit.Shape == Parabola, "", a.Conduit.SizeLabel()+" "+a.Units.Length)
 	add(a.Conduit.Bottom.OK, "bottom ", a.say(Length, a.Conduit.Bottom.V))
 	add(a.Conduit.Left.OK, "side ", figure(a.Conduit.Left.V))
+	add(a.Conduit.Right.OK, "right side ", figure(a.Conduit.Right.V))
 	add(q.N.OK, "n ", short(q.N.V))
+	add(q.VaryingN, "", "n varying with depth")
 	add(q.Slope.OK, "slope ", short(q.Slope.V))
 	add(q.Flow.OK, "flow ", withUnit(short(q.Flow.V), a.Units.Flow))
 	return text

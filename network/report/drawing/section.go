@@ -69,12 +69,22 @@ func scaleSection(outline []calculator.Place, room Box) (f scaled, stretch float
 	f = scaled{across: scale, up: scale}
 	const flattest = 0.25 // of the height of the box; flatter sections are stretched
 	if top*scale < flattest*room.height() {
-		f.up = math.Floor(room.height() / 2 / top / scale)
-		f.up = max(1, f.up) * scale
+		f.up = evenFactor(room.height()/2/top/scale) * scale
 	}
 	f.left = room.Left + width/2 - (low+high)/2*f.across
 	f.bottom = (room.Top+room.Bottom)/2 + top*f.up/2
 	return f, f.up / f.across
+}
+
+// evenFactor is the greatest of 1, 2, 5, 10, 20 … that is not over a factor of 1 or more.
+func evenFactor(most float64) float64 {
+	power := math.Pow(10, math.Floor(math.Log10(max(1, most))))
+	for _, m := range []float64{5, 2} {
+		if m*power <= most {
+			return m * power
+		}
+	}
+	return power
 }
 
 // drawSection draws outline and levels.

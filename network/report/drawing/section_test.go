@@ -30,8 +30,12 @@ var answers = map[string]calculator.Given{
 }
 
 var twoLows = []pipeflow.Point{
-	{Station: 0, Elevation: 20}, {Station: 10, Elevation: 15}, {Station: 20, Elevation: 17}, {Station: 25, Elevation: 17.5},
-	{Station: 30, Elevation: 16}, {Station: 45, Elevation: 21},
+	{Station: 0, Elevation: 20},
+	{Station: 10, Elevation: 15},
+	{Station: 20, Elevation: 17},
+	{Station: 25, Elevation: 17.5},
+	{Station: 30, Elevation: 16},
+	{Station: 45, Elevation: 21},
 }
 
 func answer(t testing.TB, g calculator.Given) *calculator.Answer {

@@ -164,18 +164,25 @@ func withBlank(text string) string {
 	return " " + text
 }
 
-// notesOf are the notes that are not of one row alone, each once.
+// notesOf are the notes that hold for every row with an answer.
 func notesOf(rows []report.AnswerRow) []string {
-	count := map[string]int{}
-	var notes []string
+	count, answered := map[string]int{}, 0
+	var first []string
 	for i := range rows {
 		if rows[i].Answer == nil {
 			continue
 		}
+		if answered++; answered == 1 {
+			first = rows[i].Notes
+		}
 		for _, n := range rows[i].Notes {
-			if count[n]++; count[n] == 2 {
-				notes = append(notes, n)
-			}
+			count[n]++
+		}
+	}
+	var notes []string
+	for _, n := range first {
+		if count[n] == answered {
+			notes = append(notes, n)
 		}
 	}
 	return notes
