@@ -22,10 +22,7 @@ type drawingFlags struct {
 
 // addTo defines the flags.
 func (d *drawingFlags) addTo(cmd *cobra.Command) {
-	var papers []string
-	for _, p := range drawing.Papers {
-		papers = append(papers, p.Name)
-	}
+	papers := paperNames()
 	f := cmd.Flags()
 	f.StringVar(&d.out, "out", "", "write to `FILE.svg`, or the sheets into a folder; without it a single sheet goes to standard output")
 	f.StringVar(&d.paper, "paper", "", "size of the paper: "+strings.Join(papers, ", ")+" (default by the job's units: a3 or ansi-b)")
@@ -34,6 +31,14 @@ func (d *drawingFlags) addTo(cmd *cobra.Command) {
 	f.BoolVar(&d.pdf, "pdf", false, "make PDF by Debian's rsvg-convert (package "+converterPackage+"); text stays text")
 	f.BoolVar(&d.force, "force", false, "replace files of --out that exist")
 	complete(cmd, "paper", papers)
+}
+
+func paperNames() []string {
+	var names []string
+	for _, p := range drawing.Papers {
+		names = append(names, p.Name)
+	}
+	return names
 }
 
 // run runs the job that is to be drawn and finds the paper.
@@ -48,7 +53,7 @@ func (d *drawingFlags) run(a *app, cmd *cobra.Command, dir string) (*analysis.Re
 	}
 	paper, ok := drawing.PaperNamed(d.paper, r.Job.Settings.Units)
 	if !ok {
-		return nil, paper, usageError{fmt.Sprintf("--paper %s: see `%s --help` for the sizes", d.paper, cmd.CommandPath())}
+		return nil, paper, usageError{fmt.Sprintf("--paper %s: write one of %s", d.paper, strings.Join(paperNames(), ", "))}
 	}
 	return r, paper, nil
 }

@@ -160,7 +160,7 @@ func (p *plan) northAndScale(box Box) {
 	p.Polygon([]Point{{x, box.Top + 7}, {x - 2.4, box.Top + 15}, {x, box.Top + 13}}, medium, Black)
 	p.Polygon([]Point{{x, box.Top + 7}, {x + 2.4, box.Top + 15}, {x, box.Top + 13}}, medium, White)
 	p.Text(Label{At: Point{x, box.Top + 5.6}, Size: 3.2, Anchor: Middle, Bold: true, Text: "N"})
-	length := roundStep(12 / p.scale.mm)
+	length := roundStep(6.5 / p.scale.mm) // 6.5 to 16 mm
 	const height = 1.6
 	left, top := box.Left+3, box.Bottom-5
 	for i := range 2 {

@@ -97,7 +97,7 @@ func (p *plan) findingMarks() {
 // markSpots are places for a number around a point.
 func markSpots(at Point, radius float64) []spot {
 	var spots []spot
-	for out := 0.5; out < 22; out = out*1.35 + 1 {
+	for out := 0.5; out < 15; out = out*1.35 + 1 {
 		for d := range 16 {
 			sin, cos := math.Sincos(-math.Pi/4 + 2*math.Pi*float64(d)/16)
 			c := Point{at.X + (radius+out+markRadius)*cos, at.Y + (radius+out+markRadius)*sin}

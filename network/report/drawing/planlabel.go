@@ -41,7 +41,7 @@ func (p *plan) label(chosen spot) {
 // with a leader.
 func aroundSpots(at Point, radius float64, labels []Label) []spot {
 	var spots []spot
-	const near, far = 0.9, 26
+	const near, far = 0.9, 15
 	for out := near; out < far; out = out*1.35 + 1 {
 		directions := 16
 		if out == near {

@@ -34,7 +34,13 @@ type placer struct {
 }
 
 // index finds shapes by the squares that they may touch.
-type index map[square][]quad
+type index map[square][]boxed
+
+// boxed is a shape with the box around it, which settles most questions.
+type boxed struct {
+	quad
+	box Box
+}
 
 type square struct{ column, row int32 }
 
@@ -57,8 +63,9 @@ func squares(b Box, do func(square) bool) {
 }
 
 func (x index) add(q quad) {
-	squares(q.box(), func(s square) bool {
-		x[s] = append(x[s], q)
+	b := q.box()
+	squares(b, func(s square) bool {
+		x[s] = append(x[s], boxed{q, b})
 		return true
 	})
 }
@@ -72,14 +79,16 @@ func (x index) addLine(a, b Point, width float64) {
 
 // count counts what meets a shape, until it is enough. A shape in several squares counts in each.
 func (x index) count(q quad, enough int) int {
-	n := 0
-	squares(q.box(), func(s square) bool {
-		for _, o := range x[s] {
-			if q.meets(o) {
-				n++
+	n, b := 0, q.box()
+	squares(b, func(s square) bool {
+		for i := range x[s] {
+			if o := &x[s][i]; b.meets(o.box) && q.meets(o.quad) {
+				if n++; n >= enough {
+					return false
+				}
 			}
 		}
-		return n < enough
+		return true
 	})
 	return n
 }
