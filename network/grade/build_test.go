@@ -1,8 +1,6 @@
 package grade_test
 
 import (
-	"testing"
-
 	"rimfall/network"
 	"rimfall/network/grade"
 	"rimfall/network/sweep"
@@ -81,8 +79,14 @@ func (d *drain) circle(size float64) pipeflow.Section {
 	return c
 }
 
+// complainer is a test, or a property in one.
+type complainer interface {
+	Helper()
+	Errorf(format string, args ...any)
+}
+
 // near complains where two numbers are farther apart than a tolerance.
-func near(t testing.TB, what string, got, want, tolerance float64) {
+func near(t complainer, what string, got, want, tolerance float64) {
 	t.Helper()
 	if !(got-want <= tolerance) || !(want-got <= tolerance) {
 		t.Errorf("%s: %.9g, want %.9g within %g", what, got, want, tolerance)

@@ -38,7 +38,7 @@ type Pipe struct {
 	AngleAssumed bool    // Deflection is neither given nor known from coordinates
 
 	full    bool    // full at the upper end
-	control float64 // height of the water below the pipe over its lower invert
+	control float64 // height of the water below the pipe over its lower invert; -Inf under a dry pipe over none
 }
 
 // Regime is how a pipe runs.

@@ -1,6 +1,8 @@
 package grade
 
 import (
+	"math"
+
 	"rimfall/network"
 	"rimfall/network/sweep"
 	"rimfall/pipeflow"
@@ -110,7 +112,7 @@ func (s Start) depth(critical, rise float64) float64 {
 func (l *Lines) rest(p network.PipeIndex, water network.Maybe) {
 	pipe, line := &l.network.Pipes[p], &l.Pipes[p]
 	upper, lower := pipe.InvertUpper.V, pipe.InvertLower.V
-	line.control = water.Or(lower) - lower
+	line.control = water.Or(math.Inf(-1)) - lower
 	if water.OK {
 		upper, lower = max(upper, water.V), max(lower, water.V)
 	}

@@ -34,7 +34,7 @@ func (l *Lines) Trace(p network.PipeIndex, parts int) []Point {
 		points = append(points, Point{at.Distance, at.Depth, hgl, hgl + b.head(at.Depth)})
 	}
 	if line.Bend > 0 {
-		points = append(points, Point{b.Length, line.HGLUpper - l.network.Pipes[p].InvertUpper.V, line.HGLUpper, line.EGLUpper})
+		points = append(points, Point{points[len(points)-1].Distance, line.HGLUpper - l.network.Pipes[p].InvertUpper.V, line.HGLUpper, line.EGLUpper})
 	}
 	return points
 }
