@@ -84,7 +84,7 @@ func independentSection(t testing.TB, u units.System, r record) pipeflow.Section
 
 // Sixty invented networks of both units, the three methods, circles and boxes, several barrels, splits, bends, overrides,
 // coordinates and columns, against a solution in another language. The surface along a pipe is good to a few 1e-5 of the
-// rise (package surface), and mostly far better: when this was written 57 of them agreed to 1e-6.
+// rise (package surface), and mostly far better: when this was written 59 of them agreed to 1e-6.
 func TestInventedNetworksAgainstAnIndependentSolution(t *testing.T) {
 	const tolerance = 5e-5 // of the rise of the largest pipe
 	networks, structures, pipes := records(t, "independent-networks.csv"), records(t, "independent-structures.csv"), records(t, "independent-pipes.csv")
@@ -126,7 +126,7 @@ func TestInventedNetworksAgainstAnIndependentSolution(t *testing.T) {
 			close++
 		}
 	}
-	if close < 55 {
+	if close < 58 {
 		t.Errorf("only %d of %d networks agree to 1e-6 of the rise", close, len(networks))
 	}
 }
