@@ -11,6 +11,7 @@ import (
 	"rimfall/network/job"
 	"rimfall/network/size"
 	"rimfall/network/sweep"
+	"rimfall/network/times"
 )
 
 // Options say how a job is run. The zero value checks the pipes as they are for
@@ -35,6 +36,9 @@ type StormRun struct {
 	Storm network.Storm
 	Flows sweep.Flows
 	Lines *grade.Lines
+	Paths []times.Walked // flow paths of areas, worked out for this storm
+
+	Network *network.Network // with the inlet times of those paths; the pipes are those of Result.Network
 }
 
 // Read reads a job folder for a run with the given options.
@@ -71,7 +75,7 @@ func Run(j *job.Job, o Options) (*Result, error) {
 	if err != nil {
 		return nil, err
 	}
-	r.Design = design
+	r.Design, r.Network = design, design.Network
 	r.Design.Lines = grade.Up(r.Network, gradeSettings(j), &r.Design.Flows, grade.DesignTailwater)
 	if check := storm.CheckPeriod; check.OK {
 		storm.ReturnPeriod = check.V
@@ -92,12 +96,16 @@ func runStorm(j *job.Job, n *network.Network, storm network.Storm, choose sweep.
 	if !ok {
 		return StormRun{}, fault.List{{File: j.Rain.File, Text: j.NoSuchPeriod(storm.ReturnPeriod)}}
 	}
-	flows, problems := sweep.Down(n, &storm, curve, choose)
+	timed, walked, problems := Timed(j, n, curve)
+	var flows sweep.Flows
+	if len(problems) == 0 {
+		flows, problems = sweep.Down(timed, &storm, curve, choose)
+	}
 	var faults fault.List
 	for _, p := range problems {
 		faults = append(faults, j.Locate(p))
 	}
-	return StormRun{Storm: storm, Flows: flows}, faults.Err()
+	return StormRun{Storm: storm, Flows: flows, Paths: walked, Network: timed}, faults.Err()
 }
 
 // Candidates lists the sizes of a job's catalogue by shape and material,

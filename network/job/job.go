@@ -4,9 +4,9 @@ import (
 	"bytes"
 	"path/filepath"
 
-	"rimfall/hydrology"
 	"rimfall/network"
 	"rimfall/network/fault"
+	"rimfall/network/times"
 	"rimfall/pipeflow/catalog"
 )
 
@@ -21,10 +21,12 @@ type Job struct {
 	Rain       Rain
 	Catalog    catalog.Catalog
 	Departures []Departure
+	Paths      []times.Path // flow paths of areas, in the order of the areas
 
-	settings document          // job.toml with places
-	files    map[string][]byte // text of every file
-	tables   map[string]*table // by name, for places and for writing back
+	givenTime []bool            // of each area
+	settings  document          // job.toml with places
+	files     map[string][]byte // text of every file
+	tables    map[string]*table // by name, for places and for writing back
 }
 
 // Purpose says what a job is read for; it decides what may be left blank.
@@ -54,6 +56,7 @@ func Read(dir string, purpose Purpose, rules []string) (*Job, error) {
 	r.settings = &j.Settings
 	r.readCatalog()
 	r.readTables(j, rules)
+	r.walkPaths(j)
 	r.judgeNetwork(j, purpose)
 	j.Catalog = r.catalog
 	return j, r.faults.Err()
@@ -68,16 +71,26 @@ func (r *reader) readTables(j *Job, rules []string) {
 		r.readPipes(t)
 	}
 	if r.has(r.settings.Files["surfaces"]) {
-		if t, ok := r.open("surfaces", "surface", "c"); ok {
+		if t, ok := r.open("surfaces", "surface"); ok {
 			r.readSurfaces(t)
+		}
+	}
+	if r.has(r.settings.Files["pieces"]) {
+		if t, ok := r.open("pieces", "area", "extent"); ok {
+			r.readPieces(t)
 		}
 	}
 	if t, ok := r.open("areas", "id", "structure", "area"); ok {
 		r.readAreas(t)
 	}
-	if text, ok := r.readFile(r.settings.Rainfall); ok {
-		j.Rain = r.readRainfall(r.settings.Rainfall, text)
+	if rain, ok := r.readRain(j); ok {
+		j.Rain = rain
 		r.judgePeriods(j)
+	}
+	if r.has(r.settings.Files["paths"]) && r.areas.slots != nil {
+		if t, ok := r.open("paths", "area", "order", "kind"); ok {
+			j.Paths = r.readPaths(t)
+		}
 	}
 	r.readAlong()
 	if r.has(r.settings.Files["departures"]) {
@@ -117,30 +130,6 @@ func (r *reader) readCatalog() {
 		r.faults.Add(r.path(name), f.Line, f.Column, "%s", f.Text)
 	}
 	r.catalog = r.catalog.With(own)
-}
-
-// judgePeriods holds the return periods of job.toml against the rainfall.
-func (r *reader) judgePeriods(j *Job) {
-	if len(j.Rain.Table.Periods) == 0 {
-		return
-	}
-	s := &j.Settings.Storm
-	if _, ok := j.Rain.Table.Curve(s.ReturnPeriod); !ok && s.ReturnPeriod > 0 {
-		j.settings.fault(&r.faults, "storm.return_period", "%s", j.NoSuchPeriod(s.ReturnPeriod))
-	}
-	if _, ok := j.Rain.Table.Curve(s.CheckPeriod.V); s.CheckPeriod.OK && !ok {
-		j.settings.fault(&r.faults, "storm.check_period", "%s", j.NoSuchPeriod(s.CheckPeriod.V))
-	}
-}
-
-// Curve is the intensity of the storm of a return period, uplift included; ok is
-// false where the rainfall has no such storm.
-func (j *Job) Curve(period float64) (curve hydrology.Curve, ok bool) {
-	curve, ok = j.Rain.Table.Curve(period)
-	if !ok {
-		return curve, false
-	}
-	return curve.Scaled(j.Settings.Storm.Uplift), true
 }
 
 // Locate gives a problem of the network its file, line and column.

@@ -4,8 +4,6 @@ import (
 	"bytes"
 	"encoding/csv"
 	"fmt"
-	"strconv"
-	"strings"
 
 	"rimfall/network"
 )
@@ -86,16 +84,6 @@ func (r *reader) judgeHeads(j *Job) {
 			Text: fmt.Sprintf("structure %s is the head of pipe %s and has no rim, and the pipe has no upper invert: give one of them", s.ID, p.ID),
 		}))
 	}
-}
-
-// NoSuchPeriod words that the rainfall has no storm of a return period, and
-// which it has.
-func (j *Job) NoSuchPeriod(period float64) string {
-	var have []string
-	for _, p := range j.Rain.Table.Periods {
-		have = append(have, strconv.FormatFloat(p, 'g', -1, 64))
-	}
-	return fmt.Sprintf("no storm of %g years in %s; there are %s years", period, j.Rain.File, strings.Join(have, ", "))
 }
 
 // columnOf finds the column, in characters, of a field in the row that starts at

@@ -9,13 +9,6 @@ import (
 	"rimfall/network/fault"
 )
 
-// Rain is the rainfall of a job: a table of intensities and where it comes from.
-type Rain struct {
-	File  string // as printed
-	Place string // where the file says so
-	Table hydrology.Table
-}
-
 // readRainfall reads a plain rainfall table: durations in minutes, then a column
 // for each return period, headed by the number of years.
 func (r *reader) readRainfall(name string, text []byte) Rain {

@@ -29,7 +29,10 @@ type reader struct {
 	lastMade   Made
 	structures ids
 	pipes      ids
-	surfaces   surfaces
+	areas      ids
+	surfaces   surfaces          // nil where the job has none
+	pieces     map[string]pieces // by id of their area
+	piecesFile string
 }
 
 // path is a file's name as it is printed: below the job folder as the user named it.

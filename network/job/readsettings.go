@@ -27,7 +27,7 @@ var (
 	criteriaSet     = section{numbers: criteriaNumbers, words: criteriaWords, texts: []string{"title"}}
 	jobSections     = []section{
 		{texts: []string{"title", "units"}},
-		{name: "storm", numbers: stormNumbers, words: stormWords, switches: stormSwitches, texts: []string{"rainfall"}},
+		{name: "storm", numbers: merged(stormNumbers, rainNumbers), words: merged(stormWords, rainWords), switches: stormSwitches, texts: []string{"rainfall", "equation"}},
 		criteriaSection,
 		{name: "grade", words: gradeWords},
 		{name: "output", words: outputWords},
@@ -58,8 +58,12 @@ func (r *reader) readSettings(d document) Settings {
 	r.applyCriteriaSet(d, &s)
 	r.applySections(d, &s)
 	r.applyFiles(d, &s)
+	r.readEquations(d, &s)
 	if file := r.text(d, "storm.rainfall"); file != "" {
 		s.Rainfall = file
+		if len(s.Rain.Equations) > 0 {
+			d.fault(&r.faults, "storm.rainfall", "the job has rainfall = %q and a [storm.equation]: leave one of them out", file)
+		}
 	}
 	if _, ok := d.values["storm.return_period"]; !ok {
 		r.faults.Add(d.file, 0, 0, "no return_period in [storm]: name the design storm in years, for example return_period = 10")
@@ -68,6 +72,15 @@ func (r *reader) readSettings(d document) Settings {
 		r.faults.Add(d.file, 0, 0, "min_slope %g is over max_slope %g", s.Criteria.MinSlope, s.Criteria.MaxSlope)
 	}
 	return s
+}
+
+// merged lays the settings of several lists together.
+func merged[V any](lists ...map[string]V) map[string]V {
+	all := map[string]V{}
+	for _, list := range lists {
+		maps.Copy(all, list)
+	}
+	return all
 }
 
 // text reads a key that holds a text; "" where it is not there.
@@ -110,7 +123,7 @@ func (r *reader) applySections(d document, s *Settings) {
 		if !nested {
 			table, name = "", key
 		}
-		if table == "files" || table == "columns" {
+		if table == "files" || table == "columns" || isEquation(key) {
 			continue
 		}
 		i := slices.IndexFunc(jobSections, func(sec section) bool { return sec.name == table })

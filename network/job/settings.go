@@ -13,6 +13,7 @@ type Settings struct {
 	Criteria network.Criteria
 	Grade    Grade
 	Rainfall string // file name
+	Rain     RainSettings
 	FlowUnit string // in tables and drawings: "cfs", "m3/s" or "L/s"
 
 	Files   map[string]string            // table → file name
@@ -43,6 +44,8 @@ var tableFiles = map[string]string{
 	"catalog":    "catalog.csv",
 	"ground":     "ground.csv",
 	"crossings":  "crossings.csv",
+	"pieces":     "pieces.csv",
+	"paths":      "paths.csv",
 }
 
 // defaults are the settings of an empty job.toml in a system of units.

@@ -26,6 +26,8 @@ var tableFields = map[string][]string{
 	"rainfall":   {"duration"},
 	"ground":     csvFields[groundRow](),
 	"crossings":  csvFields[crossingRow](),
+	"pieces":     csvFields[pieceRow](),
+	"paths":      csvFields[pathRow](),
 }
 
 func csvFields[R any]() []string {

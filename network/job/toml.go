@@ -2,6 +2,7 @@ package job
 
 import (
 	"errors"
+	"fmt"
 	"strings"
 
 	"github.com/pelletier/go-toml/v2"
@@ -38,14 +39,23 @@ func parseTOML(file string, text []byte, faults *fault.List) document {
 	return d
 }
 
-// flatten spreads the tables of the tree into dotted keys.
+// flatten spreads the tables of the tree into dotted keys. The tables of a list
+// are numbered: equation[0].shift.
 func (d *document) flatten(prefix string, tree map[string]any) {
 	for k, v := range tree {
-		if sub, ok := v.(map[string]any); ok {
-			d.flatten(prefix+k+".", sub)
-			continue
+		switch v := v.(type) {
+		case map[string]any:
+			d.flatten(prefix+k+".", v)
+		case []any:
+			for i, element := range v {
+				if sub, ok := element.(map[string]any); ok {
+					d.flatten(fmt.Sprintf("%s%s[%d].", prefix, k, i), sub)
+				}
+			}
+			d.values[prefix+k] = v
+		default:
+			d.values[prefix+k] = v
 		}
-		d.values[prefix+k] = v
 	}
 }
 
@@ -54,11 +64,20 @@ func (d *document) locate(text []byte) {
 	var p unstable.Parser
 	p.Reset(text)
 	table := ""
+	count := map[string]int{} // tables of a list, by its name
 	for p.NextExpression() {
 		e := p.Expression()
 		switch e.Kind {
-		case unstable.Table, unstable.ArrayTable:
-			table = dotted(e.Key()) + "."
+		case unstable.Table:
+			table = numbered(parts(e.Key()), count) + "."
+		case unstable.ArrayTable:
+			name := parts(e.Key())
+			above := numbered(name[:len(name)-1], count)
+			if above != "" {
+				above = "." + above
+			}
+			count[above+"."+name[len(name)-1]]++
+			table = numbered(name, count) + "."
 		case unstable.KeyValue:
 			d.locateValue(&p, table, e)
 		}
@@ -67,12 +86,15 @@ func (d *document) locate(text []byte) {
 
 // locateValue records one key, and for an inline table the keys in it.
 func (d *document) locateValue(p *unstable.Parser, prefix string, e *unstable.Node) {
-	key := prefix + dotted(e.Key())
-	if value := e.Value(); value.Kind == unstable.InlineTable {
+	key := prefix + strings.Join(parts(e.Key()), ".")
+	switch value := e.Value(); value.Kind {
+	case unstable.InlineTable:
 		for it := value.Children(); it.Next(); {
 			d.locateValue(p, key+".", it.Node())
 		}
 		return
+	case unstable.Array:
+		d.locateTables(p, key, value)
 	}
 	it := e.Key()
 	if it.Next() {
@@ -81,12 +103,41 @@ func (d *document) locateValue(p *unstable.Parser, prefix string, e *unstable.No
 	}
 }
 
-func dotted(it unstable.Iterator) string {
-	var parts []string
-	for it.Next() {
-		parts = append(parts, string(it.Node().Data))
+// locateTables finds the keys of the tables in a list that stands on one line.
+func (d *document) locateTables(p *unstable.Parser, key string, list *unstable.Node) {
+	i := 0
+	for it := list.Children(); it.Next(); {
+		element := it.Node()
+		if element.Kind == unstable.Comment {
+			continue
+		}
+		if element.Kind == unstable.InlineTable {
+			for inner := element.Children(); inner.Next(); {
+				d.locateValue(p, fmt.Sprintf("%s[%d].", key, i), inner.Node())
+			}
+		}
+		i++
 	}
-	return strings.Join(parts, ".")
+}
+
+func parts(it unstable.Iterator) []string {
+	var names []string
+	for it.Next() {
+		names = append(names, string(it.Node().Data))
+	}
+	return names
+}
+
+// numbered is the dotted name of a table; where a part of it is a list, the last table of the list is meant.
+func numbered(names []string, count map[string]int) string {
+	name := ""
+	for _, part := range names {
+		name += "." + part
+		if n := count[name]; n > 0 {
+			name += fmt.Sprintf("[%d]", n-1)
+		}
+	}
+	return strings.TrimPrefix(name, ".")
 }
 
 // fault records what is wrong with the value of a key.
@@ -94,3 +145,20 @@ func (d *document) fault(faults *fault.List, key, format string, args ...any) {
 	at := d.place[key]
 	faults.Add(d.file, at.Line, at.Column, format, args...)
 }
+
+// withNumber is the text of the file with another number as the value of a key.
+func (d *document) withNumber(text []byte, key string, value float64) []byte {
+	lines := bytes.SplitAfter(text, []byte("\n"))
+	at := d.place[key]
+	if at.Line < 1 || at.Line > len(lines) {
+		return text
+	}
+	line := lines[at.Line-1]
+	head := min(len(line), at.Column-1)
+	changed := numberAfterEquals.ReplaceAll(line[head:], []byte("${1}"+strconv.FormatFloat(value, 'f', -1, 64)))
+	lines[at.Line-1] = append(line[:head:head], changed...)
+	return bytes.Join(lines, nil)
+}
+
+// numberAfterEquals is the value of a numeric key, with all that stands before it.
+var numberAfterEquals = regexp.MustCompile(`^([^=]*=\s*)[-+0-9._eE]+`)
