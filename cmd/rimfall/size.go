@@ -4,6 +4,7 @@ import (
 	"github.com/spf13/cobra"
 
 	"rimfall/network/analysis"
+	"rimfall/network/job"
 )
 
 // sizeCommand chooses what is blank.
@@ -29,10 +30,13 @@ kept. With --out the result is written as a complete new job folder, in which
 				return err
 			}
 			if out != "" {
-				if err := r.Job.Write(out, r.Network, force); err != nil {
+				if err := r.Job.Write(out, r.Network, job.WriteOptions{Force: force, ReturnPeriod: p.storm}); err != nil {
 					return err
 				}
 				a.say("wrote the job folder %s", out)
+				for _, shared := range r.Job.SharedFiles() {
+					a.say("it holds a copy of %s, which the job shares with others", shared)
+				}
 			}
 			a.strictly(r, &p)
 			return a.print(r, &p)

@@ -13,6 +13,7 @@ import (
 
 	"rimfall/network"
 	"rimfall/network/analysis"
+	"rimfall/network/job"
 	"rimfall/network/finding"
 )
 
@@ -34,7 +35,7 @@ func TestCheckRepeatsEveryNumberOfSizeToTheLastBit(t *testing.T) {
 		}
 		d.write(d.job(), given)
 		sized := runDrawn(t, given, analysis.Options{Size: true})
-		if err := sized.Job.Write(out, sized.Network, false); err != nil {
+		if err := sized.Job.Write(out, sized.Network, job.WriteOptions{}); err != nil {
 			t.Fatal(err)
 		}
 		holdIdentity(t, sized, runDrawn(t, out, analysis.Options{}))

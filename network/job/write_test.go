@@ -42,7 +42,7 @@ slope,id,from,to ,note,length,size,x_own
 ,P2,B,O,,100,15 in,
 `), job.ToSize)
 	out := filepath.Join(t.TempDir(), "out")
-	if err := j.Write(out, completed(j), false); err != nil {
+	if err := j.Write(out, completed(j), job.WriteOptions{}); err != nil {
 		t.Fatal(err)
 	}
 	got, err := os.ReadFile(filepath.Join(out, "pipes.csv"))
@@ -77,7 +77,7 @@ func TestAFolderAppearsWholeOrNotAtAll(t *testing.T) {
 		return all
 	}
 	out := filepath.Join(parent, "out")
-	if err := j.Write(out, completed(j), false); err != nil {
+	if err := j.Write(out, completed(j), job.WriteOptions{}); err != nil {
 		t.Fatal(err)
 	}
 	if got := names(); !slices.Equal(got, []string{"out"}) {
@@ -88,13 +88,13 @@ func TestAFolderAppearsWholeOrNotAtAll(t *testing.T) {
 		t.Fatal(err)
 	}
 	var exists job.ExistsError
-	if err := j.Write(out, completed(j), false); !errors.As(err, &exists) {
+	if err := j.Write(out, completed(j), job.WriteOptions{}); !errors.As(err, &exists) {
 		t.Errorf("a folder that is not empty: %v", err)
 	}
 	if _, err := os.Stat(mine); err != nil {
 		t.Errorf("without force: %v", err)
 	}
-	if err := j.Write(out, completed(j), true); err != nil {
+	if err := j.Write(out, completed(j), job.WriteOptions{Force: true}); err != nil {
 		t.Fatal(err)
 	}
 	if _, err := os.Stat(mine); !os.IsNotExist(err) {
@@ -103,7 +103,7 @@ func TestAFolderAppearsWholeOrNotAtAll(t *testing.T) {
 	if got := names(); !slices.Equal(got, []string{"out"}) {
 		t.Errorf("beside the new folder stand %v", got)
 	}
-	if err := j.Write(j.Dir, completed(j), true); err == nil {
+	if err := j.Write(j.Dir, completed(j), job.WriteOptions{Force: true}); err == nil {
 		t.Error("the job that is read was overwritten")
 	}
 	// An empty folder that exists is a place for a job.
@@ -111,7 +111,7 @@ func TestAFolderAppearsWholeOrNotAtAll(t *testing.T) {
 	if err := os.Mkdir(empty, 0o755); err != nil {
 		t.Fatal(err)
 	}
-	if err := j.Write(empty, completed(j), false); err != nil {
+	if err := j.Write(empty, completed(j), job.WriteOptions{}); err != nil {
 		t.Error(err)
 	}
 }
@@ -139,7 +139,7 @@ min_slope = 0.004
 `)
 	j := read(t, filepath.Join(dir, "one"), job.ToSize)
 	out := filepath.Join(t.TempDir(), "far", "away")
-	if err := j.Write(out, completed(j), false); err != nil {
+	if err := j.Write(out, completed(j), job.WriteOptions{}); err != nil {
 		t.Fatal(err)
 	}
 	if err := os.RemoveAll(dir); err != nil { // the new folder needs nothing of the old ones
@@ -181,11 +181,49 @@ P2,B,O,100,`+c.shape+`
 			n.Pipes[i].Size = size
 		}
 		out := filepath.Join(t.TempDir(), "out")
-		if err := j.Write(out, n, false); err != nil {
+		if err := j.Write(out, n, job.WriteOptions{}); err != nil {
 			t.Fatal(err)
 		}
 		if got := read(t, out, job.ToCheck).Network.Pipes[1]; got.Size != size || got.Shape != c.shape {
 			t.Errorf("%s in %s: %+v, want %+v", c.shape, c.units, got.Size, size)
 		}
+	}
+}
+
+// A folder that is no job is not replaced, nor one that holds the job that is read;
+// files of the user's own in a job folder that is replaced stay.
+func TestForceTakesNothingThatIsTheUsersOwn(t *testing.T) {
+	parent := t.TempDir()
+	inner := filepath.Join(parent, "inner")
+	if err := job.WriteStarter(inner, "us"); err != nil {
+		t.Fatal(err)
+	}
+	j, err := job.Read(inner, job.ToSize, nil)
+	if err != nil {
+		t.Fatal(err)
+	}
+	force := job.WriteOptions{Force: true}
+	if err := j.Write(parent, completed(j), force); err == nil {
+		t.Error("the folder that holds the job was replaced")
+	}
+	precious := filepath.Join(t.TempDir(), "precious")
+	if err := os.MkdirAll(precious, 0o755); err != nil {
+		t.Fatal(err)
+	}
+	notes := filepath.Join(precious, "notes.txt")
+	if err := os.WriteFile(notes, []byte("keep"), 0o644); err != nil {
+		t.Fatal(err)
+	}
+	if err := j.Write(precious, completed(j), force); err == nil {
+		t.Error("a folder that is no job was replaced")
+	}
+	if err := os.WriteFile(filepath.Join(precious, job.File), nil, 0o644); err != nil {
+		t.Fatal(err)
+	}
+	if err := j.Write(precious, completed(j), force); err != nil {
+		t.Fatal(err)
+	}
+	if text, err := os.ReadFile(notes); err != nil || string(text) != "keep" {
+		t.Errorf("the user's own file is gone: %v", err)
 	}
 }
