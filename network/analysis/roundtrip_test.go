@@ -13,8 +13,8 @@ import (
 
 	"rimfall/network"
 	"rimfall/network/analysis"
-	"rimfall/network/job"
 	"rimfall/network/finding"
+	"rimfall/network/job"
 )
 
 // ofSizing are the rules that speak of choosing, which check does not do.
