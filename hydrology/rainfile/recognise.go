@@ -16,9 +16,10 @@ var (
 	webPage     = regexp.MustCompile(`(?i)<!doctype|<html`)
 )
 
-// recognise says what a page is by its own words, not by a file's name or a line's number.
+// recognise says what a page is by its own words, not by a file's name or a line's number. Comments do not count:
+// a table of one's own names its source there.
 func (p page) recognise() Kind {
-	text := strings.Join(p.lines, "\n")
+	text := p.words()
 	switch {
 	case errorAnswer.MatchString(text) || webPage.MatchString(text):
 		return Unknown
@@ -28,6 +29,17 @@ func (p page) recognise() Kind {
 		return Atlas14
 	}
 	return p.recogniseTable()
+}
+
+// words are the lines that are no comments.
+func (p page) words() string {
+	var text strings.Builder
+	for _, line := range p.lines {
+		if !strings.HasPrefix(strings.TrimLeft(line, " \t\""), "#") {
+			text.WriteString(line + "\n")
+		}
+	}
+	return text.String()
 }
 
 // recogniseTable looks at the first line past comments and blanks, which heads a table, and for rows of Atlas 14

@@ -230,3 +230,10 @@ func BenchmarkRead(b *testing.B) {
 		})
 	}
 }
+
+func TestATableThatNamesItsSourceInACommentIsATable(t *testing.T) {
+	file, faults := Read([]byte("# depth x 60 / minutes of NOAA Atlas 14, and of Environment Canada\nduration,2,10\n5,4.5,6.6\n60,1.1,1.7\n"), Options{Unit: "in/h"})
+	if file.Kind != OwnTable || len(faults) > 0 {
+		t.Errorf("%v, %v", file.Kind, faults)
+	}
+}
