@@ -36,6 +36,9 @@ func TestOnlyPlainDecimalNumbersAreNumbers(t *testing.T) {
 		{"inf", false, 0, false},
 		{"-Infinity", false, 0, false},
 		{"1e999", false, 0, false},
+		{"1e15", false, 1e15, true},
+		{"-1.1e15", false, 0, false}, // no quantity is that large
+		{"1e-320", false, 1e-320, true},
 		{"0x1p4", false, 0, false},
 		{"0x10", false, 0, false},
 		{"1_0", false, 0, false},
@@ -58,11 +61,11 @@ func TestOnlyPlainDecimalNumbersAreNumbers(t *testing.T) {
 	}
 }
 
-func TestEveryFiniteNumberComesBackAsItWasWritten(t *testing.T) {
+func TestEveryNumberOfAJobComesBackAsItWasWritten(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
 		v := math.Float64frombits(rapid.Uint64().Draw(t, "bits"))
-		if math.IsNaN(v) || math.IsInf(v, 0) {
-			t.Skip()
+		if math.IsNaN(v) || math.Abs(v) > largest {
+			t.Skip("no number of a job")
 		}
 		for _, format := range []byte{'f', 'g', 'e'} {
 			text := strconv.FormatFloat(v, format, -1, 64)

@@ -101,6 +101,17 @@ id,from,to,length,size,slope,invert_upper
 P1,A,B,100,12,,95
 P2,B,O,100,15,,
 `, "pipes.csv:2:15: pipe P1 has no slope: write the slope or both inverts, or let `rimfall size` choose them\npipes.csv:3:15: pipe P2 has no slope: write the slope or both inverts, or let `rimfall size` choose them"},
+		{"a length and a size are smaller than any quantity, an invert larger", `
+-- pipes.csv --
+id,from,to,length,size,slope,invert_upper
+P1,A,B,1e-300,1e-300,0.01,95
+P2,B,O,100,1e300,0.01,-1e16
+`, `
+pipes.csv:2:8: length = 1e-300: no length is that small
+pipes.csv:2:15: size "1e-300": a size is over 0
+pipes.csv:3:12: size "1e300": "1e300" is no size: write a number, if need be with in, ft, mm or m
+pipes.csv:3:23: invert_upper: "-1e16" is no number: no quantity is that large
+`},
 		{"n is zero or negative", `
 -- pipes.csv --
 id,from,to,length,size,slope,n

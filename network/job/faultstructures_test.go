@@ -83,7 +83,7 @@ O,outfall,1e999
 `, `
 structures.csv:2:4: rim: "0x1p4" is no number: write it in decimal digits
 structures.csv:3:4: rim: "1_000" is no number: write a plain number such as 12.5
-structures.csv:4:11: rim: "1e999" is no number: write a plain number such as 12.5
+structures.csv:4:11: rim: "1e999" is no number: no quantity is that large
 `},
 		{"a level has a unit or a percent sign", `
 -- structures.csv --

@@ -19,7 +19,7 @@ var sizeUnits = map[string]float64{
 // another than the job's is meant. why says what would be right where ok is false.
 func parseSize(text, shape string, comma bool, u units.System) (size network.Size, why string) {
 	round := shape == string(catalog.Circle)
-	if v, ok := parseNumber(text, comma); ok && round && v > 0 { // nearly every pipe of a large job
+	if v, ok := parseNumber(text, comma); ok && round && v >= smallest { // nearly every pipe of a large job
 		return network.Size{Span: v, Rise: v}, ""
 	}
 	parts := strings.Split(foldSize.Replace(strings.ToLower(text)), "x")
@@ -38,7 +38,7 @@ func parseSize(text, shape string, comma bool, u units.System) (size network.Siz
 		if !ok {
 			return size, fmt.Sprintf("%q is no size: write a number, if need be with in, ft, mm or m", p)
 		}
-		if v <= 0 {
+		if v < smallest {
 			return size, "a size is over 0"
 		}
 		lengths[i], named = v, named || hasUnit

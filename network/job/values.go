@@ -29,6 +29,8 @@ func (t *table) number(field, text string, s sign) network.Maybe {
 		t.faultAt(field, "%s: %q is no number: %s", field, text, whyNoNumber(text, t.comma))
 	case s == positive && v <= 0:
 		t.faultAt(field, "%s = %s: it must be over 0", field, text)
+	case s == positive && v < smallest:
+		t.faultAt(field, "%s = %s: no %s is that small", field, text, field)
 	case s == notNegative && v < 0:
 		t.faultAt(field, "%s = %s: it must not be negative", field, text)
 	default:

@@ -97,8 +97,8 @@ func TestAFolderAppearsWholeOrNotAtAll(t *testing.T) {
 	if err := j.Write(out, completed(j), job.WriteOptions{Force: true}); err != nil {
 		t.Fatal(err)
 	}
-	if _, err := os.Stat(mine); !os.IsNotExist(err) {
-		t.Errorf("with force the folder is replaced whole: %v", err)
+	if _, err := os.Stat(mine); err != nil {
+		t.Errorf("with force a file of the user's own is gone: %v", err)
 	}
 	if got := names(); !slices.Equal(got, []string{"out"}) {
 		t.Errorf("beside the new folder stand %v", got)
