@@ -73,6 +73,7 @@ code; a licensed engineer checks and signs.`,
 	}
 	root.AddCommand(a.checkCommand(), a.sizeCommand(), a.scheduleCommand(), a.newCommand(), a.rulesCommand(), a.manningCommand(), a.sizesCommand())
 	root.AddCommand(a.profileCommand(), a.planCommand())
+	root.AddCommand(a.carriesCommand())
 	root.AddCommand(a.compareCommand())
 	root.SetFlagErrorFunc(func(cmd *cobra.Command, err error) error {
 		return usageError{err.Error() + "; see `" + cmd.CommandPath() + " --help`"}
