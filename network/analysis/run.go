@@ -137,7 +137,7 @@ func judge(r *Result, chooser *size.Chooser, larger enlargement) []finding.Findi
 	s := &r.Job.Settings
 	run := finding.Run{
 		Network: r.Network, Criteria: &s.Criteria, Storm: &r.Design.Storm, Units: s.Units, FlowUnit: s.FlowUnit, Flows: &r.Design.Flows,
-		Lines: r.Design.Lines, Growth: larger.growth, Uncured: larger.uncured,
+		Lines: r.Design.Lines, Growth: larger.growth, Uncured: larger.uncured, Paths: r.Design.Paths, Rain: rainRemarks(r.Job, r.Design.Storm.ReturnPeriod),
 	}
 	if c := r.Check; c != nil {
 		run.Check = &finding.StormLines{Storm: &c.Storm, Flows: &c.Flows, Lines: c.Lines, Tailwater: grade.CheckTailwater}
@@ -148,7 +148,7 @@ func judge(r *Result, chooser *size.Chooser, larger enlargement) []finding.Findi
 	found := finding.Judge(run)
 	accepted := make([]finding.Departure, len(r.Job.Departures))
 	for i, d := range r.Job.Departures {
-		accepted[i] = finding.Departure{Rule: d.Rule, Subject: d.Subject, Reason: d.Reason}
+		accepted[i] = finding.Departure{Rule: d.Rule, Subject: d.Subject, Reason: d.Reason, Storm: d.Storm}
 	}
 	return finding.Accept(found, accepted, r.Design.Storm.ReturnPeriod)
 }

@@ -3,6 +3,7 @@ package analysis
 import (
 	"rimfall/hydrology"
 	"rimfall/network"
+	"rimfall/network/finding"
 	"rimfall/network/job"
 	"rimfall/network/times"
 )
@@ -20,4 +21,14 @@ func Timed(j *job.Job, n *network.Network, rain hydrology.Intensity) (*network.N
 		problems = append(problems, network.Problem{Table: "paths", Line: int(f.Line), Field: "kind", Text: f.Text})
 	}
 	return times.In(n, walked), walked, problems
+}
+
+// rainRemarks is what the rules say of the rainfall of a storm.
+func rainRemarks(j *job.Job, period float64) *finding.Rain {
+	rain := &finding.Rain{File: j.Rain.File, Given: string(j.Rain.Unit), Used: j.Settings.Units.Intensity, Remarks: j.Rain.Notices}
+	rain.Lower, rain.Upper, _ = j.Between(period)
+	if !j.Rain.Converted {
+		rain.Given = rain.Used
+	}
+	return rain
 }

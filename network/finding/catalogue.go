@@ -212,6 +212,42 @@ var rules = []Rule{
 		Notice, "rainfall.csv", common,
 	},
 	{
+		"path-limit", "formula outside its limits",
+		"a leg of a flow path is longer, flatter, steeper or larger than the formula for its time was made for",
+		"beyond what a formula was measured on, its time is a guess; split the leg, or take another kind",
+		Warning, "paths.csv", "limits as the source of each formula gives them",
+	},
+	{
+		"path-below-first-duration", "sheet flow shorter than the rainfall table",
+		"the time of a path is shorter than the first duration, whose intensity the sheet flow took",
+		"the true intensity is higher and the true time shorter",
+		Notice, "rainfall.csv", common,
+	},
+	{
+		"path-unused", "flow path not used",
+		"the area has both an inlet time and a flow path; the inlet time holds",
+		"one of the two is out of date",
+		Notice, "areas.csv time, paths.csv", common,
+	},
+	{
+		"storm-between-columns", "storm between two columns",
+		"the return period has no column of its own in the rainfall table and was interpolated",
+		"the publisher did not print these intensities",
+		Notice, "return_period, series", "linear in ln T, or in Gumbel's variate for annual maxima",
+	},
+	{
+		"rainfall-converted", "rainfall in another unit",
+		"the source gives intensities in another unit than the job's; they were converted",
+		"a reader who compares with the source sees other numbers",
+		Notice, "rainfall", common,
+	},
+	{
+		"rainfall-remark", "remark on the rainfall file",
+		"something in the rainfall file is odd, and not wrong",
+		"what was passed over has to be known",
+		Notice, "rainfall", common,
+	},
+	{
 		"time-assumed", "inlet time not given",
 		"the area has no inlet time; the minimum time was used",
 		"the shortest time gives the highest intensity, which is safe but may be wasteful",

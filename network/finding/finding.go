@@ -11,6 +11,7 @@ import (
 	"rimfall/network/grade"
 	"rimfall/network/size"
 	"rimfall/network/sweep"
+	"rimfall/network/times"
 	"rimfall/network/units"
 )
 
@@ -41,6 +42,9 @@ type Run struct {
 	Check   *StormLines  // the check storm's, where there is one
 	Growth  []Growth     // pipes enlarged for the freeboard
 	Uncured map[network.StructureIndex]bool
+
+	Paths []times.Walked // flow paths of areas in this storm
+	Rain  *Rain          // nil: nothing is said of it
 }
 
 // Judge applies every rule. Findings come in the order of the catalogue, and
@@ -52,7 +56,7 @@ func Judge(r Run) []Finding {
 		j.highVelocity, j.cover, j.coverAlongPipe, j.crossingClearance, j.minSize, j.sizeDecrease, j.invertOrder, j.leastFall, j.sizeChange,
 		j.lowestInvert, j.boundsCross, j.dropStructure, j.longPipe, j.outletVelocity,
 		j.drownedOutfall, j.fastBend, j.angleAssumed, j.jump, j.lowTailwater, j.lineUnknown, j.flowFalls, j.rationalArea,
-		j.belowFirstDuration, j.timeAssumed, j.rimUnknown, j.levelsUnknown, j.wallUnknown, j.noFlow, j.unusedOutfall,
+		j.belowFirstDuration, j.pathLimit, j.pathBelowFirst, j.pathUnused, j.stormBetween, j.rainfallConverted, j.rainfallRemark, j.timeAssumed, j.rimUnknown, j.levelsUnknown, j.wallUnknown, j.noFlow, j.unusedOutfall,
 	} {
 		rule()
 	}

@@ -19,6 +19,9 @@ var Cautions = []string{
 func Heading(r *analysis.Result) []string {
 	s := &r.Job.Settings
 	lines := []string{s.Title, stormLine(r)}
+	if from := r.Job.Rain.Describe(); from != "" {
+		lines = append(lines, "Rainfall: "+from)
+	}
 	if c := s.Criteria; c.File != "" {
 		lines = append(lines, fmt.Sprintf("Criteria: %s (%s)", c.Title, c.File))
 	} else {
@@ -29,7 +32,11 @@ func Heading(r *analysis.Result) []string {
 
 func stormLine(r *analysis.Result) string {
 	s := r.Design.Storm
-	line := fmt.Sprintf("Design storm: %s years, rainfall %s", years(s.ReturnPeriod), r.Job.Settings.Rainfall)
+	source := r.Job.Settings.Rainfall
+	if r.Job.Rain.Equation() {
+		source = "by equation"
+	}
+	line := fmt.Sprintf("Design storm: %s years, rainfall %s", years(s.ReturnPeriod), source)
 	if s.Uplift != 1 {
 		line += fmt.Sprintf(", intensities × %s", years(s.Uplift))
 	}

@@ -18,6 +18,7 @@ var PipeColumns = []Column[PipeRow]{
 	{"area", []string{"area,", "total"}, Area, func(r *PipeRow) Value { return N(r.Run.Area) }},
 	{"ca", []string{"C × area,", "total"}, Area, func(r *PipeRow) Value { return N(r.Run.CA) }},
 	{"ca_counted", []string{"C × area,", "counted"}, Area, func(r *PipeRow) Value { return Value{Number: r.Run.CACounted, OK: r.Partial} }},
+	{"peak", []string{"peak", "by"}, Text, func(r *PipeRow) Value { return peakBy(r) }},
 	{"time", []string{"time"}, Minutes, func(r *PipeRow) Value { return running(r, r.Run.Time) }},
 	{"intensity", []string{"intensity"}, Intensity, func(r *PipeRow) Value { return running(r, r.Run.Intensity) }},
 	{"inflow", []string{"steady", "inflow"}, Flow, func(r *PipeRow) Value { return N(r.Run.Inflow) }},
@@ -48,7 +49,7 @@ var PipeColumns = []Column[PipeRow]{
 // PipeGroups are the tables into which the columns of a pipe are split for
 // people, in the order of a hand calculation.
 var PipeGroups = []Group{
-	{"Flow in the pipes", []string{"id", "from", "to", "area", "ca", "ca_counted", "time", "intensity", "inflow", "flow", "travel_time"}},
+	{"Flow in the pipes", []string{"id", "from", "to", "area", "ca", "ca_counted", "peak", "time", "intensity", "inflow", "flow", "travel_time"}},
 	{"Section and uniform flow", []string{"id", "size", "n", "slope", "flow", "capacity", "capacity_ratio", "depth", "depth_ratio", "velocity", "velocity_full"}},
 	{"Critical state and levels", []string{"id", "critical_depth", "froude", "length", "invert_upper", "invert_lower", "cover_upper", "cover_lower"}},
 	{"Grade lines in the pipes", []string{"id", "hgl_upper", "hgl_lower", "egl_upper", "egl_lower", "regime", "full_length", "jump"}},

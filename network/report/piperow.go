@@ -72,3 +72,15 @@ func (r *PipeRow) Regime() string {
 	}
 	return r.Line.Regime.String()
 }
+
+// peakBy names which of the two peaks governs, where the job asks for both: that of
+// all the area at the longest time, or that of a part of it at a shorter one.
+func peakBy(r *PipeRow) Value {
+	switch {
+	case !r.Partial || !r.Run.Rained():
+		return Value{}
+	case r.Run.Part:
+		return T(network.Peaks[network.PartialArea])
+	}
+	return T(network.Peaks[network.LongestTime])
+}

@@ -17,6 +17,7 @@ func JSON(w io.Writer, r *analysis.Result, table string) error {
 	s.add(",\n\"units\":")
 	s.b = appendString(s.b, set.Units.Name)
 	s.storm(&r.Design)
+	s.rainfall(r.Job)
 	s.criteria(r)
 	s.texts("cautions", report.Cautions)
 	if table == "" || table == "pipes" {
