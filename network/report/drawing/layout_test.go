@@ -55,8 +55,14 @@ func TestSpreadLeavesPlacesThatAreFarEnoughApart(t *testing.T) {
 	if !slices.Equal(got, []float64{10, 30, 60}) {
 		t.Errorf("moved to %v", got)
 	}
-	if got := spread([]float64{10, 10}, []float64{8}, 0, 100); !slices.Equal(got, []float64{6, 14}) {
-		t.Errorf("two at one place go to %v, want 6 and 14", got)
+	for _, c := range []struct{ places, want []float64 }{
+		{[]float64{10, 10}, []float64{6, 14}},
+		{[]float64{97, 99}, []float64{92, 100}}, // not beyond the upper end
+		{[]float64{1, 2}, []float64{0, 8}},      // nor the lower one
+	} {
+		if got := spread(c.places, []float64{8}, 0, 100); !slices.Equal(got, c.want) {
+			t.Errorf("%v go to %v, want %v", c.places, got, c.want)
+		}
 	}
 }
 

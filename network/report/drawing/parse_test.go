@@ -10,13 +10,19 @@ import (
 	"regexp"
 	"strconv"
 	"strings"
-	"testing"
 
 	"rimfall/network/analysis"
 	"rimfall/network/report/drawing"
 )
 
 // The sheets are read back as any reader of SVG reads them, so that these tests know nothing of how they were drawn.
+
+// reporter is what a test, a benchmark and a rapid check have in common.
+type reporter interface {
+	Helper()
+	Errorf(format string, args ...any)
+	Fatalf(format string, args ...any)
+}
 
 // element is one element of a sheet with its attributes and text.
 type element struct {
@@ -32,7 +38,7 @@ func (e *element) number(name string) float64 {
 }
 
 // elements parses a sheet; one that is no well-formed XML fails the test. What defines the hatching is left out.
-func elements(t testing.TB, page []byte) []element {
+func elements(t reporter, page []byte) []element {
 	t.Helper()
 	var all []element
 	decoder := xml.NewDecoder(bytes.NewReader(page))
@@ -72,7 +78,7 @@ type corner struct{ x, y float64 }
 var rotation = regexp.MustCompile(`^rotate\((\S+) (\S+) (\S+)\)$`)
 
 // inkOf are the four corners of the ink of a text, by the widths of the type and 0.72 of its size over the baseline.
-func inkOf(t testing.TB, e *element) [4]corner {
+func inkOf(t reporter, e *element) [4]corner {
 	t.Helper()
 	size := e.number("font-size")
 	width := drawing.TextWidth(e.text, size, e.attributes["font-weight"] == "bold")
@@ -94,7 +100,7 @@ func inkOf(t testing.TB, e *element) [4]corner {
 }
 
 // cornersOf are the places that an element reaches.
-func cornersOf(t testing.TB, e *element) []corner {
+func cornersOf(t reporter, e *element) []corner {
 	t.Helper()
 	switch e.name {
 	case "text":
@@ -115,7 +121,7 @@ func cornersOf(t testing.TB, e *element) []corner {
 	return nil
 }
 
-func pointsOf(t testing.TB, e *element) []corner {
+func pointsOf(t reporter, e *element) []corner {
 	t.Helper()
 	var all []corner
 	for _, pair := range strings.Fields(e.attributes["points"]) {
@@ -130,7 +136,7 @@ func pointsOf(t testing.TB, e *element) []corner {
 
 // holdSheet holds a sheet to what every sheet must be: well-formed, of its paper's size, with all of it inside the frame
 // and no text over another.
-func holdSheet(t testing.TB, s drawing.Sheet) {
+func holdSheet(t reporter, s drawing.Sheet) {
 	t.Helper()
 	all := elements(t, s.Page.Bytes())
 	root := all[0]
@@ -157,7 +163,7 @@ func holdSheet(t testing.TB, s drawing.Sheet) {
 }
 
 // overlaps finds texts over other texts: convex shapes overlap unless a side of one of them separates them.
-func overlaps(t testing.TB, all []element) []string {
+func overlaps(t reporter, all []element) []string {
 	t.Helper()
 	var inks [][4]corner
 	var texts []string
@@ -194,7 +200,7 @@ func separated(a, b [4]corner) bool {
 }
 
 // texts lists the texts of a sheet.
-func texts(t testing.TB, s drawing.Sheet) []string {
+func texts(t reporter, s drawing.Sheet) []string {
 	t.Helper()
 	var list []string
 	for _, e := range elements(t, s.Page.Bytes()) {
@@ -206,16 +212,16 @@ func texts(t testing.TB, s drawing.Sheet) []string {
 }
 
 // runJob sizes and runs a job folder.
-func runJob(t testing.TB, dir string) *analysis.Result {
+func runJob(t reporter, dir string) *analysis.Result {
 	t.Helper()
 	o := analysis.Options{Size: true}
 	j, err := analysis.Read(dir, o)
 	if err != nil {
-		t.Fatal(err)
+		t.Fatalf("%v", err)
 	}
 	r, err := analysis.Run(j, o)
 	if err != nil {
-		t.Fatal(err)
+		t.Fatalf("%v", err)
 	}
 	return r
 }

@@ -166,44 +166,6 @@ func (s *profileSheet) findings() string {
 	return "Findings here: " + strings.Join(names, "; ") + "."
 }
 
-// samples is the legend of what stands on the sheet.
-func (s *profileSheet) samples() []sample {
-	list := []sample{}
-	if s.hasGround() {
-		list = append(list, s.penSample(givenGround, "ground, as given"))
-	}
-	list = append(list, s.penSample(straightGround, "straight from rim to rim"))
-	for i := range s.r.storms {
-		storm := &s.r.storms[i]
-		if storm.lines == nil {
-			continue
-		}
-		list = append(list,
-			s.penSample(penOf(hydraulic, storm), "hydraulic grade line, "+storm.years()),
-			s.penSample(penOf(energy, storm), "energy grade line, "+storm.years()))
-	}
-	list = append(list, s.pipeSample(proposedPipe, "pipe, proposed"), s.pipeSample(existingPipe, "pipe, existing"))
-	list = append(list, sample{func(b Box) {
-		s.Line(Point{b.Left + 3, b.Top + 2}, Point{b.Right - 3, b.Top + 2}, cover)
-	}, "cover"}, sample{func(b Box) {
-		s.Line(Point{b.Left + 3, b.Top + 2}, Point{b.Right - 3, b.Top + 2}, grating)
-	}, "inlet, grate"}, sample{func(b Box) {
-		s.Ellipse(Point{(b.Left + b.Right) / 2, (b.Top + b.Bottom) / 2}, 0.7, 1.6, opening, White)
-	}, "other pipe"}, sample{func(b Box) {
-		s.Ellipse(Point{(b.Left + b.Right) / 2, (b.Top + b.Bottom) / 2}, 0.7, 1.6, shaft, Hatched)
-	}, "crossing service"})
-	return list
-}
-
-// pipeSample shows the two edges of a pipe.
-func (s *sheet) pipeSample(pen Pen, text string) sample {
-	return sample{func(b Box) {
-		for _, y := range [...]float64{b.Top + 1.2, b.Bottom - 1.2} {
-			s.Line(Point{b.Left, y}, Point{b.Right, y}, pen)
-		}
-	}, text}
-}
-
 // file names the file of the sheet.
 func (s *profileSheet) file() string {
 	name := "profile-" + strings.ToLower(s.line.name)

@@ -88,16 +88,6 @@ func (g *graph) earth(points []Point) {
 	}
 }
 
-// hasGround tells whether ground was given anywhere along the part.
-func (g *graph) hasGround() bool {
-	for k := g.part.first; k < g.part.last; k++ {
-		if len(g.r.Network.GroundOver(g.line.pipes[k])) > 0 {
-			return true
-		}
-	}
-	return false
-}
-
 // crossingsOf calls do for every crossing service of the part with its station on the line.
 func (g *graph) crossingsOf(do func(station float64, c *network.Crossing)) {
 	for k := g.part.first; k < g.part.last; k++ {

@@ -125,8 +125,14 @@ func levels(r *run, l *line, p part) (low, high float64, ok bool) {
 	for k := p.first; k <= p.last; k++ {
 		s := l.structures[k]
 		note(n.Structures[s].Rim)
+		if bottom, top, ok := r.extent(s); ok {
+			note(network.Some(bottom), network.Some(top))
+		}
 		for _, i := range n.PipesIn(s) {
-			note(n.Pipes[i].InvertLower, crown(&n.Pipes[i], network.Lower))
+			note(crown(&n.Pipes[i], network.Lower))
+		}
+		for _, i := range n.PipesOut(s) {
+			note(crown(&n.Pipes[i], network.Upper))
 		}
 		for i := range r.storms {
 			note(r.storms[i].level(s), r.storms[i].tailwater(&n.Structures[s]))

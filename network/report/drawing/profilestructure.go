@@ -28,7 +28,7 @@ func (g *graph) shaftWidth() float64 {
 func (g *graph) structures() {
 	for k := g.part.first; k <= g.part.last; k++ {
 		s := g.line.structures[k]
-		bottom, top, ok := g.extent(s)
+		bottom, top, ok := g.r.extent(s)
 		if !ok {
 			continue
 		}
@@ -60,15 +60,15 @@ func (g *graph) lid(s *network.Structure, body Box) {
 
 // extent is from the lowest invert of a structure to its rim; without a rim, to a foot or 0.3 m over the highest crown.
 // ok is false where no pipe end there has a level.
-func (g *graph) extent(s network.StructureIndex) (bottom, top float64, ok bool) {
-	n := g.r.Network
-	row := report.Structure(g.r.Result, &g.r.Design, s)
+func (r *run) extent(s network.StructureIndex) (bottom, top float64, ok bool) {
+	n := r.Network
+	row := report.Structure(r.Result, &r.Design, s)
 	low := row.Lowest()
 	if !low.OK {
 		return 0, 0, false
 	}
 	roof := 1.0
-	if g.r.units.Name == units.SI.Name {
+	if r.units.Name == units.SI.Name {
 		roof = 0.3
 	}
 	top = low.V
@@ -94,8 +94,12 @@ func (g *graph) headwall(x float64, s network.StructureIndex, body Box) {
 		g.Rect(Box{x, body.Top, x + thick, crownY}, shaft, Hatched)
 	}
 	g.Polygon([]Point{
-		{x + thick, body.Bottom}, {x + thick, body.Bottom + toe}, {x, body.Bottom + toe}, {x, body.Bottom + slab},
-		{x - apron, body.Bottom + slab}, {x - apron, body.Bottom},
+		{x + thick, body.Bottom},
+		{x + thick, body.Bottom + toe},
+		{x, body.Bottom + toe},
+		{x, body.Bottom + slab},
+		{x - apron, body.Bottom + slab},
+		{x - apron, body.Bottom},
 	}, shaft, Hatched)
 	g.place.take(Box{x - apron, body.Bottom, x + thick, body.Bottom + toe})
 }

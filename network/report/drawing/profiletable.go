@@ -82,8 +82,11 @@ func (l *line) invertOut(n *network.Network, k int) network.Maybe {
 func pipeRows(r *run, l *line) []row {
 	style, u := r.style, r.units
 	rows := []row{
-		{head: "pipe", bold: true}, {head: "length, " + u.Length}, {head: "size, " + u.Size},
-		{head: "slope, %"}, {head: "material"},
+		{head: "pipe", bold: true},
+		{head: "length, " + u.Length},
+		{head: "size, " + u.Size},
+		{head: "slope, %"},
+		{head: "material"},
 	}
 	for _, p := range l.pipes {
 		pipe := &r.Network.Pipes[p]

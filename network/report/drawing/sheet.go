@@ -58,7 +58,6 @@ var (
 	frame  = Pen{Width: 0.5}
 	thin   = Pen{Width: 0.15}
 	medium = Pen{Width: 0.25}
-	heavy  = Pen{Width: 0.45}
 	fine   = Pen{Width: 0.1, Grey: true}
 	leader = Pen{Width: 0.13}
 	noEdge = Pen{}

@@ -34,15 +34,15 @@ func jobs(t testing.TB) []string {
 }
 
 // allSheets draws everything of a run.
-func allSheets(t testing.TB, r *analysis.Result, paper drawing.Paper) []drawing.Sheet {
+func allSheets(t reporter, r *analysis.Result, paper drawing.Paper) []drawing.Sheet {
 	t.Helper()
 	sheets, _, err := drawing.Profiles(r, drawing.ProfileOptions{Paper: paper})
 	if err != nil {
-		t.Fatal(err)
+		t.Fatalf("%v", err)
 	}
 	plan, _, err := drawing.Plan(r, drawing.PlanOptions{Paper: paper})
 	if err != nil {
-		t.Fatal(err)
+		t.Fatalf("%v", err)
 	}
 	return append(sheets, plan)
 }

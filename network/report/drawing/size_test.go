@@ -12,7 +12,7 @@ import (
 
 // writeJob writes an invented job of a number of structures: a chain, or a comb of short branches on a trunk, in feet.
 // Every tooth of the comb is an inlet at the head of one pipe.
-func writeJob(t testing.TB, structures int, comb bool) string {
+func writeJob(t testing.TB, structures int, comb bool, spacing float64) string {
 	t.Helper()
 	var s, p, a strings.Builder
 	s.WriteString("id,kind,x,y,rim\n")
@@ -27,11 +27,11 @@ func writeJob(t testing.TB, structures int, comb bool) string {
 		if row%2 == 1 {
 			column = 29 - column
 		}
-		return float64(column) * 150, float64(row) * 260
+		return float64(column) * spacing, float64(row) * 260
 	}
 	for i := range trunk {
 		x, y := side(i)
-		rim := 900 - 0.9*float64(i)
+		rim := 900 - 0.006*spacing*float64(i)
 		fmt.Fprintf(&s, "M%d,manhole,%g,%g,%g\n", i, x, y, rim)
 		fmt.Fprintf(&a, "a%d,M%d,0.02,0.6,10\n", i, i)
 		to := fmt.Sprintf("M%d", i+1)
@@ -46,7 +46,7 @@ func writeJob(t testing.TB, structures int, comb bool) string {
 		}
 	}
 	x, y := side(trunk)
-	fmt.Fprintf(&s, "OUT,outfall,%g,%g,%g\n", x, y, 900-0.9*float64(trunk))
+	fmt.Fprintf(&s, "OUT,outfall,%g,%g,%g\n", x, y, 900-0.006*spacing*float64(trunk))
 	dir := t.TempDir()
 	for name, text := range map[string]string{
 		"job.toml":       "title = \"Invented\"\n[storm]\nreturn_period = 10\ncheck_period = 25\n",
@@ -62,7 +62,7 @@ func writeJob(t testing.TB, structures int, comb bool) string {
 
 // A line that is too long for one sheet goes on at match lines, and loses nothing on the way.
 func TestALongLineGoesOnAtMatchLines(t *testing.T) {
-	r := runJob(t, writeJob(t, 120, false))
+	r := runJob(t, writeJob(t, 120, false, 150))
 	sheets, _, err := drawing.Profiles(r, drawing.ProfileOptions{})
 	if err != nil {
 		t.Fatal(err)
@@ -87,9 +87,25 @@ func TestALongLineGoesOnAtMatchLines(t *testing.T) {
 	}
 }
 
+// Where structures stand closer than their numbers are wide, the columns of the table are spread, and when that is not
+// enough a further sheet takes over.
+func TestStructuresCloseTogetherKeepTheirNumbersApart(t *testing.T) {
+	r := runJob(t, writeJob(t, 29, false, 9))
+	sheets, _, err := drawing.Profiles(r, drawing.ProfileOptions{})
+	if err != nil {
+		t.Fatal(err)
+	}
+	if len(sheets) < 2 {
+		t.Errorf("29 columns stand on one sheet")
+	}
+	for _, s := range sheets {
+		holdSheet(t, s)
+	}
+}
+
 // On a plan that is too full labels are left out and counted, never printed over one another.
 func TestAFullPlanLeavesLabelsOutAndCountsThem(t *testing.T) {
-	r := runJob(t, writeJob(t, 1000, true))
+	r := runJob(t, writeJob(t, 1000, true, 150))
 	sheet, notes, err := drawing.Plan(r, drawing.PlanOptions{})
 	if err != nil {
 		t.Fatal(err)
@@ -104,7 +120,7 @@ func BenchmarkPlan(b *testing.B) {
 	for _, comb := range []bool{false, true} {
 		name := map[bool]string{false: "chain", true: "comb"}[comb]
 		b.Run(name+"/1000", func(b *testing.B) {
-			r := runJob(b, writeJob(b, 1000, comb))
+			r := runJob(b, writeJob(b, 1000, comb, 150))
 			for b.Loop() {
 				sheet, _, err := drawing.Plan(r, drawing.PlanOptions{})
 				if err != nil {
@@ -120,7 +136,7 @@ func BenchmarkProfiles(b *testing.B) {
 	for _, comb := range []bool{false, true} {
 		name := map[bool]string{false: "chain", true: "comb"}[comb]
 		b.Run(name+"/1000", func(b *testing.B) {
-			r := runJob(b, writeJob(b, 1000, comb))
+			r := runJob(b, writeJob(b, 1000, comb, 150))
 			for b.Loop() {
 				sheets, _, err := drawing.Profiles(r, drawing.ProfileOptions{})
 				if err != nil {
