@@ -28,18 +28,54 @@ id = "line"
 	"town.toml":      "title = \"Town\"\nmin_slope = 0.003\n",
 	"structures.csv": "id,kind,x,y,rim,tailwater,tailwater_check,inflow,lowest_invert,least_fall,benching,loss,note\nA,inlet,0,0,100,,,0.01,98,0.05,half,0.5,\"corner, north\"\nO,outfall,30,40,,97,97.5,,,,,,\n",
 	"pipes.csv":      "line;from;to;length;shape;size;count;material;n;invert_upper;invert_lower;slope;wall;angle;loss;bend;status;share;note;x_own\n1;A;O;;circle;0,3 m;2;concrete;0,013;98,5;;0,01;75;30;0,2;10;existing;1;old;?\n",
-	"areas.csv":      "id,structure,area,c,surface,time,note\n1,A,0.5,,roof,10,\n2,A,0.2,0.3,,,\n",
+	"areas.csv":      "id,structure,area,c,surface,time,note\n1,A,0.5,,roof,10,\n2,A,0.2,0.3,,,\n3,A,0.3,,,8,\n",
 	"surfaces.csv":   "surface,c,low,high,source,note\nroof,0.9,0.8,0.95,county,\n",
 	"rainfall.csv":   "duration,10,100,note\n5,120,180,\n60,40,60,\n",
 	"departures.csv": "rule,subject,reason\ncover,*,rock\n",
 	"catalog.csv":    "shape,span,wall\ncircle,300,50\ncircle,450,60\n",
+	"ground.csv":     "pipe,station,elevation,note\n1,20,101.5,ditch\n1,30,101.2,\n",
+	"crossings.csv":  "pipe,station,name,top,bottom,note\n1,25,water main,100.2,100,\n",
+	"pieces.csv":     "area,extent,c,surface,note\n3,0.1,0.9,,\n3,0.2,,roof,\n",
+	"paths.csv":      "area,order,kind,length,slope,surface,n,section,velocity,coefficient,c,curve_number,note\n2,1,sheet,30,0.02,,0.15,,,,,,\n2,2,gutter,80,0.01,,0.016,cross 0.02 spread 2,,,,,\n2,3,velocity,100,,,,,1.2,,,,\n",
+}
+
+// equationSeed is a job whose rainfall is an equation.
+const equationSeed = `units = "si"
+[storm]
+return_period = 10
+[storm.equation]
+form = "sherman"
+numerator = 1200.5
+shift = 8
+exponent = 0.8
+shortest = 5
+longest = 1440
+`
+
+func TestTheJobThatIsFuzzedHasNoFault(t *testing.T) {
+	dir := t.TempDir()
+	for file, text := range seedFiles {
+		if err := os.WriteFile(filepath.Join(dir, file), []byte(text), 0o644); err != nil {
+			t.Fatal(err)
+		}
+	}
+	for _, purpose := range []Purpose{ToCheck, ToSize} {
+		j, err := Read(dir, purpose, []string{"cover"})
+		if err != nil {
+			t.Fatal(err)
+		}
+		judgeSound(t, j.Network)
+	}
 }
 
 // fuzzFile feeds any bytes to the reader of one file of an otherwise sound job:
 // the answer is a network or a list of faults, each with a text and a place that
 // is not negative, and never a panic.
-func fuzzFile(f *testing.F, name string) {
+func fuzzFile(f *testing.F, name string, more ...string) {
 	f.Add([]byte(seedFiles[name]))
+	for _, text := range more {
+		f.Add([]byte(text))
+	}
 	for _, odd := range []string{"", "\ufeff", "\xff\xfe", "\"", "#\n", "\r\n\r\n", ",,,\n,,,\n", "a\n\"b\nc", "id;id\n1;1\n", "\x00\n\x00"} {
 		f.Add([]byte(odd))
 	}
@@ -101,7 +137,9 @@ func judgeSound(t *testing.T, n *network.Network) {
 	}
 }
 
-func FuzzSettings(f *testing.F)    { fuzzFile(f, "job.toml") }
+func FuzzSettings(f *testing.F) {
+	fuzzFile(f, "job.toml", equationSeed, "[[storm.equation]]\n[[storm.equation.term]]\n")
+}
 func FuzzCriteriaSet(f *testing.F) { fuzzFile(f, "town.toml") }
 func FuzzStructures(f *testing.F)  { fuzzFile(f, "structures.csv") }
 func FuzzPipes(f *testing.F)       { fuzzFile(f, "pipes.csv") }
@@ -109,6 +147,10 @@ func FuzzAreas(f *testing.F)       { fuzzFile(f, "areas.csv") }
 func FuzzSurfaces(f *testing.F)    { fuzzFile(f, "surfaces.csv") }
 func FuzzRainfall(f *testing.F)    { fuzzFile(f, "rainfall.csv") }
 func FuzzDepartures(f *testing.F)  { fuzzFile(f, "departures.csv") }
+func FuzzGround(f *testing.F)      { fuzzFile(f, "ground.csv") }
+func FuzzCrossings(f *testing.F)   { fuzzFile(f, "crossings.csv") }
+func FuzzPieces(f *testing.F)      { fuzzFile(f, "pieces.csv") }
+func FuzzPaths(f *testing.F)       { fuzzFile(f, "paths.csv") }
 func FuzzCatalog(f *testing.F)     { fuzzFile(f, "catalog.csv") }
 
 func FuzzNumber(f *testing.F) {
