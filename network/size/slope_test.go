@@ -124,6 +124,26 @@ func TestLowerBoundsCapTheSlope(t *testing.T) {
 			func(s *situation) { rims(100, 98)(s); s.network.Pipes[pipeBC].InvertUpper = network.Some(96.8) },
 			chosen{12, 97.83, 96.9},
 		},
+		{
+			// Of two pipes out of B the higher one counts: 97.20 + 0.10.
+			"the highest given invert downstream of a split", pipeAB, 2,
+			func(s *situation) {
+				rims(100, 98)(s)
+				s.network.Pipes[pipeBC].InvertUpper = network.Some(96.8)
+				s.network.Pipes = append(s.network.Pipes, s.network.Pipes[pipeBC])
+				s.network.Pipes[2].InvertUpper = network.Some(97.2)
+			},
+			chosen{12, 97.83, 97.3},
+		},
+		{
+			// 97.005 is no whole hundredth: the lower bound is rounded up.
+			"a lowest invert between two hundredths", pipeAB, 2,
+			func(s *situation) {
+				rims(100, 98)(s)
+				s.network.Structures[structureB].LowestInvert = network.Some(97.005)
+			},
+			chosen{12, 97.83, 97.01},
+		},
 	})
 }
 
