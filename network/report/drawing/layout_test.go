@@ -194,3 +194,15 @@ func TestTextsAreCutAndWrappedToTheirWidth(t *testing.T) {
 		}
 	})
 }
+
+// A grade line is cut off where it leaves the drawing, at the very height, and comes back where it returns.
+func TestALineIsCutOffAtTheUpperEdge(t *testing.T) {
+	got := cutAbove([]Point{{0, 20}, {10, 0}, {20, 0}, {30, 40}, {40, 40}}, 10)
+	want := [][]Point{{{0, 20}, {5, 10}}, {{22.5, 10}, {30, 40}, {40, 40}}}
+	if len(got) != 2 || !slices.Equal(got[0], want[0]) || !slices.Equal(got[1], want[1]) {
+		t.Errorf("%v, want %v", got, want)
+	}
+	if got := cutAbove([]Point{{0, 1}, {5, 2}}, 10); len(got) != 0 {
+		t.Errorf("%v of a line that is above from end to end", got)
+	}
+}

@@ -48,7 +48,7 @@ func (p *plan) findingList() {
 		}
 		p.drawMark(Point{left + 3.6, y + 2.1}, e.mark.number, e.mark.breaks)
 		for k, l := range e.lines {
-			p.Text(Label{At: Point{left + listIndent, y + 2.9 + float64(k)*listStep}, Size: smallType, Bold: k == 0 && len(e.lines) > 1, Text: l})
+			p.Text(Label{At: Point{left + listIndent, y + 2.9 + float64(k)*listStep}, Size: smallType, Bold: k == 0 && l == e.mark.subject+p.missing(e.mark), Text: l})
 		}
 		y += e.height()
 	}
@@ -105,7 +105,7 @@ func (p *plan) missing(m *mark) string {
 	return " (not on the plan)"
 }
 
-// byName is one line: the subject and the names of the rules, with the storm where it is not the design storm.
+// byName is the subject and the names of the rules, with the storm where it is not the design storm.
 func (p *plan) byName(m *mark) []string {
-	return []string{Shorten(m.names(p.r)+p.missing(m), smallType, listWidth, false)}
+	return wrap(m.names(p.r)+p.missing(m), smallType, listWidth)
 }

@@ -136,16 +136,20 @@ func (s *profileSheet) finish(i, of int) {
 		title += fmt.Sprintf(", part %d of %d", s.i+1, s.of)
 	}
 	station, level := s.gridSteps()
+	notes := []string{
+		s.findings(),
+		"Inverts at the structures' centres; stations run upgrade from the lower end. Pipes and structures are to scale upright; the width of structures is a sign.",
+	}
+	if s.cut {
+		notes = append(notes, "A grade line stands higher than this drawing and is cut off at its upper edge; its levels are in the table.")
+	}
 	s.titled(s.r, heading{
 		title: title,
 		lines: []string{
 			fmt.Sprintf("Scale on %s: horizontal %s, vertical %s; vertical exaggeration %.4g : 1", s.paper.Title, a.along.say(s.r.units), a.up.say(s.r.units), a.exaggeration),
 			fmt.Sprintf("Grid %g %s by %g %s; levels over the datum of the job", station, s.r.units.Length, level, s.r.units.Length),
 		},
-		notes: []string{
-			s.findings(),
-			"Inverts at the structures' centres; stations run upgrade from the lower end. Pipes and structures are to scale upright; the width of structures is a sign.",
-		},
+		notes: notes,
 		count: fmt.Sprintf("sheet %d of %d", i+1, of),
 	})
 }

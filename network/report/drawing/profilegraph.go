@@ -17,6 +17,7 @@ type graph struct {
 	low     float64   // level of the lower edge
 	columns []float64 // of the table, one for each structure of the part
 	place   *placer
+	cut     bool // a grade line is higher than the graph
 }
 
 // newGraph lays a part of a line on a sheet: in the middle of the width, and with more of the spare height under the
@@ -46,6 +47,9 @@ func (g *graph) x(station float64) float64 {
 
 // y is where a level stands on the sheet.
 func (g *graph) y(level float64) float64 { return g.box.Bottom - (level-g.low)*g.layout.up.mm }
+
+// above tells whether a level has no room in the graph.
+func (g *graph) above(level float64) bool { return g.y(level) < g.box.Top+2 }
 
 // at is the place of a level at a station.
 func (g *graph) at(station, level float64) Point { return Point{g.x(station), g.y(level)} }

@@ -111,52 +111,69 @@ func (a *layout) tallest(r *run, l *line) float64 {
 	return most
 }
 
-// levels is the range of everything that is drawn of a part; ok is false where no level is known.
-func levels(r *run, l *line, p part) (low, high float64, ok bool) {
-	low, high = math.Inf(1), math.Inf(-1)
-	note := func(values ...network.Maybe) {
-		for _, v := range values {
-			if v.OK {
-				low, high = min(low, v.V), max(high, v.V)
-			}
+// levelRange is a range of levels that grows.
+type levelRange struct{ low, high float64 }
+
+func newLevelRange() levelRange { return levelRange{math.Inf(1), math.Inf(-1)} }
+
+func (l *levelRange) note(values ...network.Maybe) {
+	for _, v := range values {
+		if v.OK {
+			l.low, l.high = min(l.low, v.V), max(l.high, v.V)
 		}
 	}
-	n := r.Network
+}
+
+// levels is the range of what is drawn of a part: all of the ground and of what is built, and grade lines as high as that
+// is tall over it; a line that stands higher still would only make the rest too small to read, and is cut off. ok is false
+// where no level is known.
+func levels(r *run, l *line, p part) (low, high float64, ok bool) {
+	built, water := newLevelRange(), newLevelRange()
 	for k := p.first; k <= p.last; k++ {
-		s := l.structures[k]
-		note(n.Structures[s].Rim)
-		if bottom, top, ok := r.extent(s); ok {
-			note(network.Some(bottom), network.Some(top))
-		}
-		for _, i := range n.PipesIn(s) {
-			note(crown(&n.Pipes[i], network.Lower))
-		}
-		for _, i := range n.PipesOut(s) {
-			note(crown(&n.Pipes[i], network.Upper))
-		}
+		noteBuilt(r, l.structures[k], &built)
 		for i := range r.storms {
-			note(r.storms[i].level(s), r.storms[i].tailwater(&n.Structures[s]))
+			s := &r.storms[i]
+			water.note(s.level(l.structures[k]), s.tailwater(&r.Network.Structures[l.structures[k]]))
 		}
 	}
 	for k := p.first; k < p.last; k++ {
-		noteAlong(r, l.pipes[k], note)
+		noteAlong(r, l.pipes[k], &built)
+		for i := range r.storms {
+			for _, at := range r.storms[i].trace(l.pipes[k]) {
+				water.note(network.Some(at.HGL), network.Some(at.EGL))
+			}
+		}
 	}
-	return low, high, low <= high
+	high = built.high
+	if water.high > high {
+		high = min(water.high, 2*built.high-built.low)
+	}
+	return min(built.low, water.low), high, built.low <= built.high
 }
 
-// noteAlong notes the levels along a pipe.
-func noteAlong(r *run, p network.PipeIndex, note func(...network.Maybe)) {
+// noteBuilt notes the levels of a structure and the pipes that end there.
+func noteBuilt(r *run, s network.StructureIndex, built *levelRange) {
+	n := r.Network
+	built.note(n.Structures[s].Rim)
+	if bottom, top, ok := r.extent(s); ok {
+		built.note(network.Some(bottom), network.Some(top))
+	}
+	for _, i := range n.PipesIn(s) {
+		built.note(crown(&n.Pipes[i], network.Lower))
+	}
+	for _, i := range n.PipesOut(s) {
+		built.note(crown(&n.Pipes[i], network.Upper))
+	}
+}
+
+// noteAlong notes the levels along a pipe: its own, the ground, services.
+func noteAlong(r *run, p network.PipeIndex, built *levelRange) {
 	pipe := &r.Network.Pipes[p]
-	note(pipe.InvertUpper, pipe.InvertLower, crown(pipe, network.Upper), crown(pipe, network.Lower))
+	built.note(pipe.InvertUpper, pipe.InvertLower, crown(pipe, network.Upper), crown(pipe, network.Lower))
 	for _, g := range r.Network.GroundOver(p) {
-		note(network.Some(g.Elevation))
+		built.note(network.Some(g.Elevation))
 	}
 	for _, c := range r.crossings[p] {
-		note(network.Some(c.Top), network.Some(c.Bottom))
-	}
-	for i := range r.storms {
-		for _, at := range r.storms[i].trace(p) {
-			note(network.Some(at.HGL), network.Some(at.EGL))
-		}
+		built.note(network.Some(c.Top), network.Some(c.Bottom))
 	}
 }

@@ -33,12 +33,47 @@ func (g *graph) gradeLines() {
 				station := g.line.stations[k] + at.Distance
 				water, head = append(water, g.at(station, at.HGL)), append(head, g.at(station, at.EGL))
 			}
-			g.Polyline(head, penOf(energy, s))
-			g.Polyline(water, penOf(hydraulic, s))
-			g.passes(head)
-			g.passes(water)
+			g.waterLine(head, penOf(energy, s))
+			g.waterLine(water, penOf(hydraulic, s))
 		}
 	}
+}
+
+// waterLine draws a grade line where it is not higher than the graph, and notes where it is.
+func (g *graph) waterLine(points []Point, pen Pen) {
+	for _, stretch := range cutAbove(points, g.box.Top) {
+		g.Polyline(stretch, pen)
+		g.passes(stretch)
+	}
+	for _, p := range points {
+		g.cut = g.cut || p.Y < g.box.Top
+	}
+}
+
+// cutAbove cuts a line off at the height y and gives the stretches under it.
+func cutAbove(points []Point, y float64) [][]Point {
+	var all [][]Point
+	inside := false
+	for i, p := range points {
+		if i > 0 && (points[i-1].Y < y) != (p.Y < y) { // it passes y between the two
+			a := points[i-1]
+			at := Point{a.X + (p.X-a.X)*(y-a.Y)/(p.Y-a.Y), y}
+			if inside {
+				all[len(all)-1] = append(all[len(all)-1], at)
+			} else {
+				all, inside = append(all, []Point{at}), true
+			}
+		}
+		if p.Y < y {
+			inside = false
+			continue
+		}
+		if !inside {
+			all, inside = append(all, nil), true
+		}
+		all[len(all)-1] = append(all[len(all)-1], p)
+	}
+	return all
 }
 
 // standing draws the water in the structures, over their shafts, and the receiving water.
@@ -53,7 +88,7 @@ func (g *graph) standing() {
 				g.receiving(x, s, s.tailwater(given))
 				continue
 			}
-			if !v.OK {
+			if !v.OK || g.above(v.V) {
 				continue
 			}
 			y := g.y(v.V)
@@ -75,7 +110,7 @@ func (g *graph) waterSign(at Point) {
 
 // receiving draws the water into which an outfall runs.
 func (g *graph) receiving(x float64, s *storm, level network.Maybe) {
-	if !level.OK {
+	if !level.OK || g.above(level.V) {
 		return
 	}
 	const length = 12
@@ -95,7 +130,7 @@ func (g *graph) receivingNames() {
 	for i := range g.r.storms {
 		s := &g.r.storms[i]
 		v := s.tailwater(given)
-		if !v.OK {
+		if !v.OK || g.above(v.V) {
 			continue
 		}
 		at := Point{x - 10, g.y(v.V)}
@@ -111,7 +146,7 @@ func (g *graph) jumps() {
 		s := &g.r.storms[i]
 		for k := g.part.first; k < g.part.last; k++ {
 			low, high, ok := g.jump(s, k)
-			if !ok {
+			if !ok || high.Y < g.box.Top {
 				continue
 			}
 			g.zigzag(low, high)
