@@ -45,20 +45,23 @@ func (n *Network) Cover(p *Pipe, e End) Maybe {
 	return Some(s.Rim.V - (invert.V + p.Section.Rise() + p.Wall))
 }
 
-// LargestIn is the largest full area among the pipes that enter a structure.
+// LargestIn is the largest full area among the pipes that enter a structure. Of
+// equal ones it is the pipe whose id comes first, so that the order of the rows
+// changes no result.
 func (n *Network) LargestIn(s StructureIndex) (pipe PipeIndex, area float64, ok bool) {
 	for _, i := range n.PipesIn(s) {
-		if a := n.Pipes[i].FullArea(); !ok || a > area {
+		if a := n.Pipes[i].FullArea(); !ok || a > area || a == area && n.Pipes[i].ID < n.Pipes[pipe].ID {
 			pipe, area, ok = i, a, true
 		}
 	}
 	return pipe, area, ok
 }
 
-// LowestIn is the lowest invert among the pipes that enter a structure.
+// LowestIn is the lowest invert among the pipes that enter a structure; of equal
+// ones that of the pipe whose id comes first.
 func (n *Network) LowestIn(s StructureIndex) (pipe PipeIndex, invert float64, ok bool) {
 	for _, i := range n.PipesIn(s) {
-		if v := n.Pipes[i].InvertLower; v.OK && (!ok || v.V < invert) {
+		if v := n.Pipes[i].InvertLower; v.OK && (!ok || v.V < invert || v.V == invert && n.Pipes[i].ID < n.Pipes[pipe].ID) {
 			pipe, invert, ok = i, v.V, true
 		}
 	}
