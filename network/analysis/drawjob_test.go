@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"os"
 	"path/filepath"
+	"slices"
 	"strconv"
 	"strings"
 
@@ -189,21 +190,20 @@ func (d draw) dialect() dialect {
 	return s
 }
 
+// columns are the headings that are written.
+func (s dialect) columns(table sheet) []string {
+	if !s.blankLeftOut {
+		return table.headings
+	}
+	return slices.DeleteFunc(slices.Clone(table.headings), func(h string) bool {
+		return !slices.ContainsFunc(table.rows, func(r map[string]string) bool { return r[h] != "" })
+	})
+}
+
 // write writes a sheet as CSV text; rename gives fields headings of the user's own.
 func (s dialect) write(table sheet, rename map[string]string) string {
 	var b strings.Builder
-	columns := table.headings
-	if s.blankLeftOut {
-		columns = nil
-		for _, h := range table.headings {
-			for _, r := range table.rows {
-				if r[h] != "" {
-					columns = append(columns, h)
-					break
-				}
-			}
-		}
-	}
+	columns := s.columns(table)
 	if s.mark {
 		b.WriteString("\ufeff")
 	}
@@ -249,6 +249,9 @@ func (s dialect) cell(text string, quote bool) string {
 	return text
 }
 
+// ownHeadings are headings of a user's own for fields of pipes.csv.
+var ownHeadings = map[string]string{"invert_upper": "IL up", "size": "Ø", "slope": "fall, 1", "from": "upstream end"}
+
 // write writes a drawn job to a new folder, each table in a dialect of its own.
 func (d draw) write(j drawnJob, dir string) {
 	units, rainfall := "us", "duration,10,100\n5,6,8\n15,3.9,5.2\n60,1.6,2.2\n1440,0.2,0.3\n1e9,0.1,0.2\n"
@@ -256,18 +259,19 @@ func (d draw) write(j drawnJob, dir string) {
 		units, rainfall = "si", "duration;10;100\n5;150;200\n15;98;130\n60;40;55\n1440;5;7,5\n1e9;3;4\n"
 	}
 	toml := "units = \"" + units + "\"\n[storm]\nreturn_period = 10\n" + strings.Join(j.settings, "\n") + "\n"
-	rename := map[string]string{}
+	pipes := d.dialect()
+	quoted := map[string]string{} // a heading with a comma is quoted where a comma separates
 	if rapid.Bool().Draw(d.T, "own headings") {
-		rename = map[string]string{"invert_upper": "IL up", "size": "Ø", "slope": "fall, 1"}
-		toml += "[columns.pipes]\ninvert_upper = \"IL up\"\nsize = \"Ø\"\nslope = \"fall, 1\"\n"
+		toml += "[columns.pipes]\n"
+		for _, field := range pipes.columns(j.pipes) { // a heading that is named has to be there
+			if own := ownHeadings[field]; own != "" {
+				toml += field + " = \"" + own + "\"\n"
+				quoted[field] = pipes.cell(own, false)
+			}
+		}
 	}
 	files := map[string]string{"job.toml": toml, "rainfall.csv": rainfall}
 	files["structures.csv"] = d.dialect().write(j.structures, nil)
-	pipes := d.dialect()
-	quoted := map[string]string{} // a heading with a comma is quoted where a comma separates
-	for f, h := range rename {
-		quoted[f] = pipes.cell(h, false)
-	}
 	files["pipes.csv"] = pipes.write(j.pipes, quoted)
 	files["areas.csv"] = d.dialect().write(j.areas, nil)
 	for name, text := range files {
