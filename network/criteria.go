@@ -18,6 +18,7 @@ type Criteria struct {
 	MinShear           Maybe // boundary shear at design depth, lb/ft² or Pa
 	MaxVelocity        float64
 	Freeboard          float64
+	FreeboardCheck     Maybe   // in the check storm; not given: the same
 	N                  float64 // for a pipe with neither n nor material
 
 	MinClearance      Maybe // upright gap to a crossing service

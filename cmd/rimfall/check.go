@@ -25,7 +25,7 @@ The grade lines run from the outfalls up. How a pipe then runs is one word:
   jump                 a hydraulic jump stands in the pipe; below it the pipe may run full
 A pipe without inverts, or above one, has no grade line; its word then says how it
 would run by itself.`,
-		Example: "  rimfall check examples/orchard-rise-sized\n  rimfall check JOB --format json --storm 25\n  rimfall check JOB --table findings --strict",
+		Example: "  rimfall check orchard-rise-sized\n  rimfall check JOB --format json --storm 25\n  rimfall check JOB --table findings --strict",
 		Args:    oneJob,
 		RunE: func(cmd *cobra.Command, args []string) error {
 			if err := p.judge(cmd); err != nil {

@@ -27,7 +27,7 @@ func (d *drawingFlags) addTo(cmd *cobra.Command) {
 	f.StringVar(&d.out, "out", "", "write to `FILE.svg`, or the sheets into a folder; without it a single sheet goes to standard output")
 	f.StringVar(&d.paper, "paper", "", "size of the paper: "+strings.Join(papers, ", ")+" (default by the job's units: a3 or ansi-b)")
 	f.Float64Var(&d.storm, "storm", 0, "design storm in `years`, in place of the job's")
-	f.BoolVar(&d.size, "size", false, "choose first what is blank, as `rimfall size` does")
+	f.BoolVar(&d.size, "size", false, "choose first what is blank, as the command size does")
 	f.BoolVar(&d.pdf, "pdf", false, "make PDF by Debian's rsvg-convert (package "+converterPackage+"); text stays text")
 	f.BoolVar(&d.force, "force", false, "replace files of --out that exist")
 	complete(cmd, "paper", papers)

@@ -28,7 +28,7 @@ is too long for one sheet goes on at a match line.
 Ground between structures comes from ground.csv (pipe, station, elevation), crossing
 services from crossings.csv (pipe, station, name, top, bottom), where the job has them;
 their stations count along the pipe from its upper end.`,
-		Example: "  rimfall profile examples/orchard-rise --size --from Q-1 > profile.svg\n  rimfall profile examples/orchard-rise-sized --out profiles\n  rimfall profile JOB --out profiles.pdf",
+		Example: "  rimfall profile examples/orchard-rise --size --from Q-1 > profile.svg\n  rimfall profile orchard-rise-sized --out profiles\n  rimfall profile JOB --out profiles.pdf",
 		Args:    oneJob,
 		RunE: func(cmd *cobra.Command, args []string) error {
 			r, paper, err := d.run(a, cmd, args[0])

@@ -66,19 +66,28 @@ code; a licensed engineer checks and signs.`,
 		Example:       "  rimfall new hillside\n  rimfall size hillside --out hillside-sized\n  rimfall check hillside-sized\n  rimfall schedule hillside-sized --format markdown",
 		SilenceUsage:  true,
 		SilenceErrors: true,
-		Args:          cobra.NoArgs,
 		RunE: func(cmd *cobra.Command, _ []string) error {
 			return cmd.Help()
 		},
 	}
 	root.AddCommand(a.checkCommand(), a.sizeCommand(), a.scheduleCommand(), a.newCommand(), a.rulesCommand(), a.manningCommand(), a.sizesCommand())
 	root.AddCommand(a.profileCommand(), a.planCommand())
-	root.AddCommand(a.carriesCommand())
-	root.AddCommand(a.compareCommand())
+	root.AddCommand(a.rainCommand())
+	root.AddCommand(a.carriesCommand(), a.headroomCommand())
+	root.AddCommand(a.compareCommand(), a.explainCommand())
 	root.SetFlagErrorFunc(func(cmd *cobra.Command, err error) error {
-		return usageError{err.Error() + "; see `" + cmd.CommandPath() + " --help`"}
+		return usageError{plainFlagError(err) + "; see `" + cmd.CommandPath() + " --help`"}
 	})
 	return root
+}
+
+// plainFlagError words a flag's error without the name of a Go function.
+func plainFlagError(err error) string {
+	text, why, found := strings.Cut(err.Error(), ": strconv.")
+	if found && strings.HasSuffix(why, "invalid syntax") {
+		return text + ": that is no number"
+	}
+	return err.Error()
 }
 
 // usageError is a command line that cannot be run.

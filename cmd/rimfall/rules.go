@@ -8,6 +8,7 @@ import (
 
 	"github.com/spf13/cobra"
 
+	"rimfall/network/fault"
 	"rimfall/network/finding"
 	"rimfall/network/report/text"
 )
@@ -30,7 +31,7 @@ func (a *app) rulesCommand() *cobra.Command {
 			if len(args) == 1 {
 				i := slices.Index(finding.Names(), args[0])
 				if i < 0 {
-					return usageError{fmt.Sprintf("no rule %q; `rimfall rules` prints them", args[0])}
+					return usageError{fmt.Sprintf("no rule %q: %s", args[0], fault.Suggest(args[0], finding.Names()))}
 				}
 				rules = rules[i : i+1]
 			}

@@ -8,8 +8,17 @@ import (
 )
 
 // Departure accepts findings of a rule on a subject for a reason. The subject "*"
-// stands for every subject.
-type Departure struct{ Rule, Subject, Reason string }
+// stands for every subject; a storm, where one is given, for that return period alone.
+type Departure struct {
+	Rule, Subject, Reason string
+	Storm                 network.Maybe
+}
+
+// accepts tells whether the departure is about a finding.
+func (d *Departure) accepts(f *Finding) bool {
+	return strings.EqualFold(f.Rule.Name, d.Rule) && (d.Subject == "*" || f.Subject == d.Subject) &&
+		(!d.Storm.OK || f.Storm == d.Storm.V)
+}
 
 // Accept marks the findings that departures accept; nothing is taken away. A
 // departure that matches nothing adds a notice.
@@ -18,7 +27,7 @@ func Accept(found []Finding, departures []Departure, storm float64) []Finding {
 		used := false
 		for i := range found {
 			f := &found[i]
-			if strings.EqualFold(f.Rule.Name, d.Rule) && (d.Subject == "*" || f.Subject == d.Subject) {
+			if d.accepts(f) {
 				used = true
 				if f.Accepted == "" {
 					f.Accepted = d.Reason

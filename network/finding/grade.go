@@ -66,9 +66,6 @@ func (j *judge) eachLevel(rule func(s *StormLines, i network.StructureIndex, giv
 // surcharge speaks once of a pipe: of the end where the line stands higher over the crown.
 func (j *judge) surcharge() {
 	j.eachLine(func(s *StormLines, i network.PipeIndex, p *network.Pipe, line *grade.Pipe) {
-		if line.Regime == grade.Dry {
-			return
-		}
 		rise := p.Section.Rise()
 		crown, level, end := p.InvertUpper.V+rise, line.HGLUpper, network.Upper
 		if low := p.InvertLower.V + rise; line.HGLLower-low > level-crown {
@@ -127,8 +124,11 @@ func (j *judge) shutOut(s *StormLines, at *grade.Structure, rim float64) (flow f
 }
 
 func (j *judge) freeboard() {
-	limit := j.Criteria.Freeboard
 	j.eachLevel(func(s *StormLines, i network.StructureIndex, given *network.Structure, at *grade.Structure) {
+		limit := j.Criteria.Freeboard
+		if s.Storm != j.Storm {
+			limit = j.Criteria.FreeboardCheck.Or(limit)
+		}
 		free := at.Freeboard(given)
 		if !BreaksFreeboard(free, limit) {
 			return

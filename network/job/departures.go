@@ -3,6 +3,7 @@ package job
 import (
 	"strings"
 
+	"rimfall/network"
 	"rimfall/network/fault"
 )
 
@@ -11,6 +12,7 @@ type Departure struct {
 	Rule    string
 	Subject string // an id, or "*" for every subject
 	Reason  string
+	Storm   network.Maybe // return period, years, for which alone it is accepted
 	Line    int
 }
 
@@ -19,6 +21,7 @@ type departureRow struct {
 	Rule    string `csv:"rule"`
 	Subject string `csv:"subject"`
 	Reason  string `csv:"reason"`
+	Storm   string `csv:"storm"`
 	Note    string `csv:"note"`
 }
 
@@ -26,7 +29,7 @@ type departureRow struct {
 func (r *reader) readDepartures(t *table, rules []string) []Departure {
 	var all []Departure
 	eachRow(t, func(row *departureRow) {
-		d := Departure{note(row.Rule), note(row.Subject), note(row.Reason), t.line}
+		d := Departure{note(row.Rule), note(row.Subject), note(row.Reason), t.number("storm", row.Storm, positive), t.line}
 		switch {
 		case d.Rule == "":
 			t.faultAt("rule", "rule is blank: name the rule that is departed from")

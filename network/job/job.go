@@ -2,7 +2,9 @@ package job
 
 import (
 	"bytes"
+	"maps"
 	"path/filepath"
+	"slices"
 
 	"rimfall/network"
 	"rimfall/network/fault"
@@ -53,7 +55,7 @@ func Read(dir string, purpose Purpose, rules []string) (*Job, error) {
 		return nil, r.faults.Err()
 	}
 	j.Settings = r.readSettings(j.settings)
-	r.settings = &j.Settings
+	r.settings, r.document = &j.Settings, &j.settings
 	r.readCatalog()
 	r.readTables(j, rules)
 	r.walkPaths(j)
@@ -108,11 +110,17 @@ func (r *reader) open(name string, required ...string) (*table, bool) {
 		return nil, false
 	}
 	t, ok := openTable(name, r.path(file), text, r.settings.Columns[name], required, &r.faults)
-	if ok {
-		t.sizeUnit = r.settings.Units.Size
-		r.tables[name] = t
+	if !ok {
+		return t, false
 	}
-	return t, ok
+	t.sizeUnit = r.settings.Units.Size
+	r.tables[name] = t
+	for _, field := range slices.Sorted(maps.Keys(t.renames)) {
+		if !t.has(field) {
+			r.document.fault(&r.faults, "columns."+name+"."+field, "%s has no heading %q, which is named here for %s", t.file, t.renames[field], field)
+		}
+	}
+	return t, true
 }
 
 // readCatalog lays the job's own list of sizes, if it has one, over the standard sizes.

@@ -18,6 +18,9 @@ func (r *reader) judgeNetwork(j *Job, purpose Purpose) {
 	}
 	whole := r.dropLoose()
 	n.Connect()
+	if r.tables["structures"].broken || r.tables["pipes"].broken {
+		return // rows are missing, so what the others are joined to is not known
+	}
 	told := r.places()
 	for _, p := range n.Validate() {
 		if p.Table == "structures" && p.Line > 0 && !whole {
@@ -30,7 +33,7 @@ func (r *reader) judgeNetwork(j *Job, purpose Purpose) {
 		r.faults = append(r.faults, f)
 	}
 	if purpose == ToSize {
-		r.judgeHeads(j)
+		r.judgeHeads(j, told)
 	}
 }
 
@@ -71,7 +74,7 @@ func (r *reader) dropLoose() (whole bool) {
 
 // judgeHeads: sizing hangs the levels of a branch on the rim or the given invert
 // at its head.
-func (r *reader) judgeHeads(j *Job) {
+func (r *reader) judgeHeads(j *Job, told map[filePlace]bool) {
 	n := r.network
 	for i := range n.Pipes {
 		p := &n.Pipes[i]
@@ -79,10 +82,13 @@ func (r *reader) judgeHeads(j *Job) {
 		if p.InvertUpper.OK || s.Rim.OK || len(n.PipesIn(p.From)) > 0 {
 			continue
 		}
-		r.faults = append(r.faults, j.Locate(network.Problem{
+		f := j.Locate(network.Problem{
 			Table: "structures", Line: int(s.Line), Field: "rim",
 			Text: fmt.Sprintf("structure %s is the head of pipe %s and has no rim, and the pipe has no upper invert: give one of them", s.ID, p.ID),
-		}))
+		})
+		if !told[filePlace{f.File, place{f.Line, f.Column}}] {
+			r.faults = append(r.faults, f)
+		}
 	}
 }
 

@@ -22,6 +22,7 @@ type reader struct {
 	tables  map[string]*table
 
 	settings   *Settings
+	document   *document // job.toml, with the places of its keys
 	network    *network.Network
 	catalog    catalog.Catalog
 	sections   map[sectionKey]Made
@@ -68,6 +69,9 @@ func (r *reader) readFile(name string) (text []byte, ok bool) {
 		line, column := invalidAt(text)
 		r.faults.Add(r.path(name), line, column, "is not UTF-8 text; save it as UTF-8")
 		return nil, false
+	}
+	if bytes.IndexByte(text, '\n') < 0 { // line ends of old spreadsheets
+		text = bytes.ReplaceAll(text, []byte("\r"), []byte("\n"))
 	}
 	r.files[name] = text
 	return text, true

@@ -24,7 +24,7 @@ type section struct {
 
 var (
 	criteriaSection = section{name: "criteria", numbers: criteriaNumbers, words: criteriaWords, texts: []string{"set"}}
-	criteriaSet     = section{numbers: criteriaNumbers, words: criteriaWords, texts: []string{"title"}}
+	criteriaSet     = section{numbers: criteriaNumbers, words: criteriaWords, texts: []string{"title", "units"}}
 	jobSections     = []section{
 		{texts: []string{"title", "units"}},
 		{name: "storm", numbers: merged(stormNumbers, rainNumbers), words: merged(stormWords, rainWords), switches: stormSwitches, texts: []string{"rainfall", "equation"}},
@@ -110,6 +110,9 @@ func (r *reader) applyCriteriaSet(d document, s *Settings) {
 	s.Criteria.Title, s.Criteria.File = r.text(set, "title"), name
 	if s.Criteria.Title == "" && len(set.keys) > 0 {
 		r.faults.Add(set.file, 0, 0, "a criteria set needs a title, which is printed on every output")
+	}
+	if u := r.text(set, "units"); u != "" && u != s.Units.Name {
+		set.fault(&r.faults, "units", "the criteria are in units %q and the job is in %q; name a set in the job's units", u, s.Units.Name)
 	}
 	for _, key := range set.keys {
 		r.apply(set, key, key, criteriaSet, s)

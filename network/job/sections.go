@@ -25,7 +25,7 @@ func (r *reader) sizeAndWall(t *table, row *pipeRow, p *network.Pipe) {
 	}
 	text := strings.TrimSpace(row.Size)
 	if text == "" {
-		r.judgeBlankSize(t, p)
+		r.judgeBlankSize(t, row, p)
 		return
 	}
 	size, why := parseSize(text, p.Shape, t.comma, r.settings.Units)
@@ -46,10 +46,13 @@ func (r *reader) sizeAndWall(t *table, row *pipeRow, p *network.Pipe) {
 
 // judgeBlankSize: a pipe that is checked needs a size; one that is to be sized
 // needs sizes to choose from.
-func (r *reader) judgeBlankSize(t *table, p *network.Pipe) {
+func (r *reader) judgeBlankSize(t *table, row *pipeRow, p *network.Pipe) {
 	if r.purpose == ToCheck {
 		t.faultAt("size", "pipe %s has no size: write it, or let `rimfall size` choose it", p.ID)
 		return
+	}
+	if _, known := catalog.MaterialByName(p.Material); !known && p.Material != "" && strings.TrimSpace(row.N) == "" {
+		return // the material is a fault already
 	}
 	if len(r.catalog.ForMaterial(r.settings.Units.Name, p.Material, catalog.Shape(p.Shape))) == 0 {
 		t.faultAt("size", "pipe %s has no size, and no %s of %s is in the catalogue to choose from: write the size, or list sizes in %s",

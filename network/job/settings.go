@@ -108,6 +108,7 @@ var criteriaNumbers = map[string]number{
 	"min_shear":       {func(s *Settings, v float64) { s.Criteria.MinShear = network.Some(v) }, 0, huge, false, "a shear, 0 or more"},
 	"max_velocity":    {func(s *Settings, v float64) { s.Criteria.MaxVelocity = v }, 0, huge, true, "a velocity over 0"},
 	"freeboard":       {func(s *Settings, v float64) { s.Criteria.Freeboard = v }, 0, huge, false, "a height, 0 or more"},
+	"freeboard_check": {func(s *Settings, v float64) { s.Criteria.FreeboardCheck = network.Some(v) }, 0, huge, false, "a height, 0 or more"},
 	"n":               {func(s *Settings, v float64) { s.Criteria.N = v }, 0, 1, true, "a Manning's n, over 0"},
 
 	"max_drop":            {func(s *Settings, v float64) { s.Criteria.MaxDrop = network.Some(v) }, 0, huge, true, "a height over 0"},

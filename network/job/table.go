@@ -60,6 +60,7 @@ type table struct {
 	headLine int
 	line     int      // of the current row
 	cells    int      // that the current row really has
+	broken   bool     // a row was no CSV, so rows are missing
 	record   []string // of the current row, evened out
 	lines    []int    // start of each line in text, made when a place is asked for
 
@@ -222,7 +223,12 @@ func (t *table) next() ([]string, error) {
 		record, err := t.csv.Read()
 		var bad *csv.ParseError
 		if errors.As(err, &bad) {
-			t.faults.Add(t.file, bad.Line, t.runes(bad.Line, bad.Column), "not valid CSV: %s", whyNoCSV(bad))
+			t.broken = true
+			line, column := bad.Line, bad.Column
+			if bad.StartLine < bad.Line { // a quote that is never closed takes in the rows below it
+				line, column = bad.StartLine, 1
+			}
+			t.faults.Add(t.file, line, t.runes(line, column), "not valid CSV: %s", whyNoCSV(bad))
 			continue
 		}
 		if err != nil {

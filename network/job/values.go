@@ -72,8 +72,8 @@ func (r *reader) structure(t *table, field, text string) network.StructureIndex 
 	if i, ok := r.structures.find(text); ok {
 		return network.StructureIndex(i)
 	}
-	if r.structures.rows == 0 {
-		return -1 // the table of structures could not be read or is empty, which is a fault already
+	if known := r.tables["structures"]; r.structures.rows == 0 || known != nil && known.broken {
+		return -1 // the table of structures could not be read whole, which is a fault already
 	}
 	if text == "" {
 		t.faultAt(field, "%s is blank: name a structure", field)

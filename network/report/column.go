@@ -100,7 +100,7 @@ func (s Style) Show(q Quantity, v Value) string {
 	case q == Flow:
 		return s.Units.ShowFlow(v.Number, s.FlowUnit)
 	case q == Size || q == Roughness:
-		return strconv.FormatFloat(round(v.Number, 6), 'f', -1, 64)
+		return strconv.FormatFloat(round(v.Number, 4), 'f', -1, 64)
 	case q == Percent:
 		return fixed(100*v.Number, 2)
 	}

@@ -2,6 +2,7 @@ package report
 
 import (
 	"fmt"
+	"slices"
 	"strconv"
 	"strings"
 
@@ -19,7 +20,7 @@ type ScheduleRow struct {
 
 // Schedule makes the rows of the pipe schedule.
 func Schedule(r *analysis.Result) []ScheduleRow {
-	remarks := remarksBySubject(r.Findings)
+	remarks := remarksBySubject(r)
 	rows := make([]ScheduleRow, len(r.Network.Pipes))
 	for i := range rows {
 		row := Pipe(r, &r.Design, network.PipeIndex(i))
@@ -35,19 +36,23 @@ func Schedule(r *analysis.Result) []ScheduleRow {
 	return rows
 }
 
-// remarksBySubject lists the titles of errors and warnings by subject, each once.
-func remarksBySubject(found []finding.Finding) map[string][]string {
+// remarksBySubject lists the titles of errors and warnings by subject, each once,
+// with the storm where it is not the design storm.
+func remarksBySubject(r *analysis.Result) map[string][]string {
 	remarks := map[string][]string{}
-	for i := range found {
-		f := &found[i]
+	for i := range r.Findings {
+		f := &r.Findings[i]
 		if f.Rule.Severity == finding.Notice {
 			continue
 		}
 		word := f.Rule.Title
+		if f.Storm != r.Design.Storm.ReturnPeriod {
+			word += fmt.Sprintf(" (%g years)", f.Storm)
+		}
 		if f.Accepted != "" {
 			word += " (accepted)"
 		}
-		if list := remarks[f.Subject]; len(list) == 0 || list[len(list)-1] != word {
+		if list := remarks[f.Subject]; !slices.Contains(list, word) {
 			remarks[f.Subject] = append(list, word)
 		}
 	}
@@ -56,9 +61,9 @@ func remarksBySubject(found []finding.Finding) map[string][]string {
 
 // SectionWords is a section as a plan names it: "24 in", "2 × 96x48 in box".
 func SectionWords(p *network.Pipe, unit string) string {
-	text := strconv.FormatFloat(round(p.Size.Rise, 3), 'f', -1, 64)
+	text := strconv.FormatFloat(round(p.Size.Rise, 4), 'f', -1, 64)
 	if p.Shape != "circle" {
-		text = strconv.FormatFloat(round(p.Size.Span, 3), 'f', -1, 64) + "x" + text
+		text = strconv.FormatFloat(round(p.Size.Span, 4), 'f', -1, 64) + "x" + text
 	}
 	text += " " + unit
 	if p.Shape != "circle" {
@@ -116,7 +121,7 @@ type StructureScheduleRow struct {
 
 // StructureSchedule makes the rows of the structure schedule.
 func StructureSchedule(r *analysis.Result) []StructureScheduleRow {
-	remarks := remarksBySubject(r.Findings)
+	remarks := remarksBySubject(r)
 	rows := make([]StructureScheduleRow, len(r.Network.Structures))
 	for i := range rows {
 		s := network.StructureIndex(i)
@@ -142,6 +147,12 @@ func ends(r *analysis.Result, pipes []network.PipeIndex, e network.End) string {
 		words = append(words, strings.TrimSpace(p.ID+" "+style.Show(Level, M(p.Invert(e)))))
 	}
 	return strings.Join(words, ", ")
+}
+
+// StructureScheduleGroups split the structure schedule for a terminal.
+var StructureScheduleGroups = []Group{
+	{"Structure schedule", []string{"id", "kind", "rim", "height", "pipes_in", "pipes_out"}},
+	{"Remarks on structures", []string{"id", "remarks"}},
 }
 
 // StructureScheduleColumns are the columns of the structure schedule.

@@ -11,8 +11,12 @@ func (s *sink) rainfall(j *job.Job) {
 	s.add(",\n\"rainfall\":{\"file\":")
 	s.b = appendString(s.b, file)
 	for _, pair := range [][2]string{
-		{"kind", rain.Kind}, {"place", rain.Place}, {"source", rain.Source}, {"series", rain.Series.String()},
-		{"unit", string(rain.Unit)}, {"bound", rain.Bound.String()},
+		{"kind", rain.Kind},
+		{"place", rain.Place},
+		{"source", rain.Source},
+		{"series", rain.Series.String()},
+		{"unit", string(rain.Unit)},
+		{"bound", rain.Bound.String()},
 	} {
 		if pair[1] != "" {
 			s.add(",\"" + pair[0] + "\":")

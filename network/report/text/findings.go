@@ -1,6 +1,7 @@
 package text
 
 import (
+	"fmt"
 	"strings"
 
 	"rimfall/network/finding"
@@ -40,16 +41,12 @@ func (p *printer) ofRule(found []finding.Finding, design float64, brief bool) {
 			others = append(others, f.Subject)
 			continue
 		}
-		p.line("    %-8s  %s", f.Subject, f.Message)
+		p.hanging(fmt.Sprintf("    %-8s  ", f.Subject), f.Message)
 		if f.Accepted != "" {
-			p.line("    %-8s  accepted departure: %s", "", f.Accepted)
+			p.hanging(fmt.Sprintf("    %-8s  ", ""), "accepted departure: "+f.Accepted)
 		}
 	}
 	if len(others) > 0 {
-		label := "    in the check storm at "
-		for _, l := range wrap(strings.Join(others, ", "), lineWidth-len(label)) {
-			p.line("%s%s", label, l)
-			label = strings.Repeat(" ", len(label))
-		}
+		p.hanging("    in the check storm at ", strings.Join(others, ", "))
 	}
 }

@@ -1,6 +1,7 @@
 package text
 
 import (
+	"fmt"
 	"io"
 
 	"rimfall/network/analysis"
@@ -27,11 +28,28 @@ func Schedule(w io.Writer, r *analysis.Result, o Options) error {
 		}
 	}
 	if o.Table == "" || o.Table == "structures" {
-		p.table("Structure schedule", makeGrid(p.style, report.StructureScheduleColumns, report.StructureSchedule(r)))
+		p.structureSchedule(report.StructureSchedule(r))
 	}
 	if o.Table == "" || o.Table == "quantities" {
 		p.table("Quantities", makeGrid(p.style, report.QuantityColumns, report.Quantities(r)))
 	}
 	p.cautions()
 	return p.err
+}
+
+// structureSchedule prints one table in Markdown; in a terminal the remarks follow
+// by themselves.
+func (p *printer) structureSchedule(rows []report.StructureScheduleRow) {
+	groups := report.StructureScheduleGroups
+	if p.markdown {
+		p.table(groups[0].Title, makeGrid(p.style, report.StructureScheduleColumns, rows))
+		return
+	}
+	p.table(groups[0].Title, makeGrid(p.style, report.Pick(report.StructureScheduleColumns, groups[0].Keys), rows))
+	p.title(groups[1].Title)
+	for i := range rows {
+		if rows[i].Remarks != "" {
+			p.hanging(fmt.Sprintf("  %-10s", rows[i].Structure.ID), rows[i].Remarks)
+		}
+	}
 }

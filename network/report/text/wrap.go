@@ -6,14 +6,19 @@ import (
 )
 
 // lineWidth is the width of running text in a terminal.
-const lineWidth = 88
+const lineWidth = 100
 
 // wrapped prints a text after a label, further lines indented under it.
 func (p *printer) wrapped(label, text string) {
-	indent := "  " + label
-	for _, l := range wrap(text, lineWidth-len(indent)) {
-		p.line("%s%s", indent, l)
-		indent = strings.Repeat(" ", utf8.RuneCountInString(indent))
+	p.hanging("  "+label, text)
+}
+
+// hanging prints a text after a label, further lines under where it began.
+func (p *printer) hanging(label, text string) {
+	width := utf8.RuneCountInString(label)
+	for _, l := range wrap(text, lineWidth-width) {
+		p.line("%s%s", label, l)
+		label = strings.Repeat(" ", width)
 	}
 }
 
