@@ -40,6 +40,14 @@ var gradeRules = []ruleCase{
 		not: inflowB("96.8"), // 1.021174
 	},
 	{
+		// At 96.95 the level at B is that plus friction and velocity head: for 12 in 97.49, 15 in 97.13, 18 in 97.0232,
+		// a freeboard of 0.9768. 21 in: capacity 11.204 cfs, Sf = (2.283895/11.204)² · 0.005, 0.0208 ft on 100 ft;
+		// 2.283895/2.40528 = 0.9495 ft/s, 0.0140 ft: 96.9848, a freeboard of 1.0152.
+		rule: "grade-line-size", subject: "P2", size: true,
+		found: with(inflowB("96.95"), criteria(`size_for = "grade-line"`), edits{p2, "P2,B,O,100,,,0.005,94.2"}), value: 21, limit: 12,
+		not: with(inflowB("96.95"), edits{p2, "P2,B,O,100,,,0.005,94.2"}),
+	},
+	{
 		rule: "grade-line-unknown", subject: "P1",
 		found: edits{p2, "P2,B,O,100,15,2.25,0.005,"}, value: open, limit: open,
 		not: edits{},
