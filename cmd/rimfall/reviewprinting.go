@@ -14,14 +14,16 @@ type reviewPrinting struct {
 	tables        []string
 }
 
-// addTo defines the flags; tables are those that can be printed alone.
+// addTo defines the flags; tables are those that can be printed alone, if any.
 func (p *reviewPrinting) addTo(cmd *cobra.Command, tables ...string) {
 	p.tables = tables
 	f := cmd.Flags()
 	f.StringVar(&p.format, "format", "table", "how to print: "+strings.Join(formats, ", "))
-	f.StringVar(&p.table, "table", "", "print one table only: "+strings.Join(tables, ", "))
 	complete(cmd, "format", formats)
-	complete(cmd, "table", tables)
+	if len(tables) > 0 {
+		f.StringVar(&p.table, "table", "", "print one table only: "+strings.Join(tables, ", "))
+		complete(cmd, "table", tables)
+	}
 }
 
 // judge checks the words of the flags.

@@ -136,6 +136,11 @@ func (s *Subject) roomsOf(r *runner, period float64, row []float64) error {
 	if err != nil {
 		return err
 	}
+	timed, err := s.timed(rain)
+	if err != nil {
+		return err
+	}
+	copy(r.network.Areas, timed.Areas)
 	storm := s.Storm
 	storm.ReturnPeriod = period
 	flows, problems := r.sweep.Down(&storm, rain)

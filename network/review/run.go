@@ -2,6 +2,7 @@ package review
 
 import (
 	"runtime"
+	"slices"
 	"sync"
 	"sync/atomic"
 
@@ -42,6 +43,13 @@ func (s *Subject) rain(period float64) (hydrology.Intensity, error) {
 	return storm, nil
 }
 
+// timed is the network with the inlet times that the flow paths of its areas have in a storm; without paths it is the
+// network itself. The pipes are shared. The error is a fault.List.
+func (s *Subject) timed(rain hydrology.Intensity) (*network.Network, error) {
+	n, _, problems := analysis.Timed(s.Job, s.Network, rain)
+	return n, s.problems(problems)
+}
+
 // problems turns problems of a run into faults with their places.
 func (s *Subject) problems(all []network.Problem) error {
 	var faults fault.List
@@ -51,14 +59,18 @@ func (s *Subject) problems(all []network.Problem) error {
 	return faults.Err()
 }
 
-// runner runs storms over one network in its own room; each thread has one.
+// runner runs storms over one network in its own room; each thread has one. Areas and structures of its network are
+// its own, and may be changed from run to run; pipes and adjacency are shared.
 type runner struct {
-	sweep *sweep.Again
-	grade *grade.Again
+	network *network.Network
+	sweep   *sweep.Again
+	grade   *grade.Again
 }
 
 func newRunner(n *network.Network, settings grade.Settings, peak network.Peak) *runner {
-	return &runner{sweep.NewAgain(n, peak), grade.NewAgain(n, settings)}
+	own := *n
+	own.Areas, own.Structures = slices.Clone(n.Areas), slices.Clone(n.Structures)
+	return &runner{&own, sweep.NewAgain(&own, peak), grade.NewAgain(&own, settings)}
 }
 
 // runners makes a runner for each of a number of threads over one network.

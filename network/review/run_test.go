@@ -6,6 +6,7 @@ import (
 
 	"rimfall/network"
 	"rimfall/network/analysis"
+	"rimfall/network/networktest"
 )
 
 // millStreet is an invented older trunk line with a split, over a real rainfall table.
@@ -64,4 +65,14 @@ func structureIndex(t testing.TB, n *network.Network, id string) network.Structu
 	}
 	t.Fatalf("no structure %s", id)
 	return -1
+}
+
+// invented is a job of an invented network of any size.
+func invented(t testing.TB, shape networktest.Shape, pipes int) *Subject {
+	t.Helper()
+	dir := t.TempDir()
+	if err := networktest.WriteFolder(dir, networktest.New(shape, pipes)); err != nil {
+		t.Fatal(err)
+	}
+	return read(t, dir)
 }

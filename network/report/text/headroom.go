@@ -1,0 +1,44 @@
+package text
+
+import (
+	"fmt"
+	"io"
+
+	"rimfall/network/report"
+	"rimfall/network/review"
+)
+
+// Headroom prints how much more may be connected where.
+func Headroom(w io.Writer, h *review.HeadroomReport, o Options) error {
+	p := reviewPrinter(w, h.Subject, o)
+	set := &h.Subject.Job.Settings
+	p.heading([]string{
+		set.Title,
+		fmt.Sprintf("Headroom in the storm of %g years, rainfall %s; limits: %s", h.Subject.Storm.ReturnPeriod, set.Rainfall, h.Words()),
+		fmt.Sprintf("An area of C %g and %g min, or a steady flow in its place, until the first limit breaks anywhere in the system", h.Options.C, h.Options.Time),
+		"Peaks by partial area, whatever the job says: the larger of the longest time and any shorter one. Rounded down",
+	})
+	p.table("Headroom at the structures", makeGrid(p.style, review.HeadroomColumns, h.Rows()))
+	if aside := h.SetAsideRows(); len(aside) > 0 {
+		p.table(fmt.Sprintf("Set aside: %d limits are broken already, and count no more", len(aside)), setAsideGrid(p.style, aside))
+	}
+	p.cautions()
+	return p.err
+}
+
+// setAsideGrid lists what is set aside by rule, the places of a rule in a row.
+func setAsideGrid(style report.Style, aside []review.SetAsideRow) grid {
+	type ofRule struct{ rule, places string }
+	var rules []ofRule
+	for _, a := range aside {
+		if k := len(rules) - 1; k >= 0 && rules[k].rule == a.Rule {
+			rules[k].places += ", " + a.ID
+			continue
+		}
+		rules = append(rules, ofRule{a.Rule, a.ID})
+	}
+	return makeGrid(style, []report.Column[ofRule]{
+		{Key: "rule", Head: []string{"rule"}, Value: func(r *ofRule) report.Value { return report.T(r.rule) }},
+		{Key: "places", Head: []string{"places"}, Value: func(r *ofRule) report.Value { return report.T(r.places) }},
+	}, rules)
+}
