@@ -66,6 +66,8 @@ func valueOf(f hydraulic) func(depth float64) float64 {
 func between(low, high float64) float64 {
 	const outward = 64
 	switch {
+	case low == 0 && math.IsInf(high, 1):
+		return 1 // anywhere to begin with
 	case low == 0:
 		return high / outward
 	case math.IsInf(high, 1):
