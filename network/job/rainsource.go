@@ -33,6 +33,9 @@ type Rain struct {
 // Equation tells whether the rainfall is one or more equations instead of a table.
 func (rain *Rain) Equation() bool { return len(rain.equations) > 0 }
 
+// SeriesWord is the series as job.toml writes it.
+func (rain *Rain) SeriesWord() string { return seriesNames[rain.Series] }
+
 // readRain reads the rainfall, whatever its kind.
 func (r *reader) readRain(j *Job) (rain Rain, ok bool) {
 	if equations := r.settings.Rain.Equations; len(equations) > 0 {

@@ -14,7 +14,7 @@ func (s *sink) rainfall(j *job.Job) {
 		{"kind", rain.Kind},
 		{"place", rain.Place},
 		{"source", rain.Source},
-		{"series", rain.Series.String()},
+		{"series", rain.SeriesWord()},
 		{"unit", string(rain.Unit)},
 		{"bound", rain.Bound.String()},
 	} {
