@@ -20,8 +20,8 @@ type mark struct {
 	isPipe    bool
 }
 
-// marksOf numbers the structures and pipes with errors and warnings, structures first, in the order of the files.
-// Notices and accepted departures have no mark.
+// marksOf numbers the structures and pipes with errors and warnings, structures first, in the order of the files. What is
+// found of an area is marked at the structure to which it drains. Notices and accepted departures have no mark.
 func marksOf(r *run) []mark {
 	bySubject := map[string][]*finding.Finding{}
 	for i := range r.Findings {
@@ -30,26 +30,38 @@ func marksOf(r *run) []mark {
 		}
 	}
 	var marks []mark
-	add := func(subject string, m mark) {
-		// A structure and a pipe may share an id; each takes the findings that are about its kind of thing.
-		for _, f := range bySubject[subject] {
-			if m.isPipe && f.AboutPipe() || !m.isPipe && f.AboutStructure() {
-				m.findings = append(m.findings, f)
-				m.breaks = m.breaks || f.Breaks()
-			}
-		}
+	add := func(m mark) {
 		if len(m.findings) > 0 {
-			m.number, m.subject = len(marks)+1, subject
+			m.number = len(marks) + 1
 			marks = append(marks, m)
 		}
 	}
-	for i := range r.Network.Structures {
-		add(r.Network.Structures[i].ID, mark{structure: network.StructureIndex(i)})
+	n := r.Network
+	for i := range n.Structures {
+		s := network.StructureIndex(i)
+		m := mark{structure: s, subject: n.Structures[i].ID}
+		m.take(bySubject[m.subject], (*finding.Finding).AboutStructure)
+		for _, a := range n.AreasAt(s) {
+			m.take(bySubject[n.Areas[a].ID], (*finding.Finding).AboutArea)
+		}
+		add(m)
 	}
-	for i := range r.Network.Pipes {
-		add(r.Network.Pipes[i].ID, mark{pipe: network.PipeIndex(i), isPipe: true})
+	for i := range n.Pipes {
+		m := mark{pipe: network.PipeIndex(i), isPipe: true, subject: n.Pipes[i].ID}
+		m.take(bySubject[m.subject], (*finding.Finding).AboutPipe)
+		add(m)
 	}
 	return marks
+}
+
+// take adds the findings that are about its kind of thing; another kind may have the same id.
+func (m *mark) take(found []*finding.Finding, about func(*finding.Finding) bool) {
+	for _, f := range found {
+		if about(f) {
+			m.findings = append(m.findings, f)
+			m.breaks = m.breaks || f.Breaks()
+		}
+	}
 }
 
 // names is the subject with the names of the rules, and the storm where it is not the design storm.
@@ -57,6 +69,9 @@ func (m *mark) names(r *run) string {
 	var names []string
 	for _, f := range m.findings {
 		name := f.Rule.Name
+		if f.AboutArea() {
+			name += " of area " + f.Subject
+		}
 		if f.Storm != r.Design.Storm.ReturnPeriod {
 			name += " (" + strconv.FormatFloat(f.Storm, 'g', -1, 64) + " years)"
 		}

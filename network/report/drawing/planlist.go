@@ -80,7 +80,11 @@ const listWidth = findingsWidth - listIndent - 2
 func (p *plan) inFull(m *mark) []string {
 	lines := []string{Shorten(m.subject+p.missing(m), smallType, listWidth, true)}
 	for _, f := range m.findings {
-		lines = append(lines, wrap(f.Rule.Title+": "+f.Message, smallType, listWidth)...)
+		text := f.Rule.Title + ": " + f.Message
+		if f.AboutArea() {
+			text = "area " + f.Subject + ", " + text
+		}
+		lines = append(lines, wrap(text, smallType, listWidth)...)
 	}
 	return lines
 }
