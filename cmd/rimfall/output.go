@@ -16,7 +16,7 @@ import (
 // The formats and tables of the commands that print a run.
 var (
 	formats = []string{"table", "markdown", "csv", "json"}
-	tables  = []string{"pipes", "structures", "findings"}
+	tables  = []string{"pipes", "structures", "findings", "areas"}
 )
 
 // say writes one line to standard error, where every word about a result goes.

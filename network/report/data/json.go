@@ -8,7 +8,7 @@ import (
 )
 
 // JSON writes a run as one object. table narrows it to one of its arrays,
-// "pipes", "structures" or "findings"; "" writes all.
+// "pipes", "structures", "areas" or "findings"; "" writes all.
 func JSON(w io.Writer, r *analysis.Result, table string) error {
 	s := newSink(w)
 	set := &r.Job.Settings
@@ -26,10 +26,13 @@ func JSON(w io.Writer, r *analysis.Result, table string) error {
 	if table == "" || table == "structures" {
 		writeArray(s, "structures", structures(r, &r.Design))
 	}
+	if table == "" || table == "areas" {
+		writeArray(s, "areas", areas(r, &r.Design))
+	}
 	if table == "" || table == "findings" {
 		writeArray(s, "findings", findings(r))
 	}
-	if r.Check != nil && table != "findings" {
+	if r.Check != nil && table != "findings" && table != "areas" {
 		s.checkStorm(r, table)
 	}
 	s.add("\n}\n")

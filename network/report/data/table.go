@@ -58,12 +58,19 @@ func findings(r *analysis.Result) rows[finding.Finding] {
 	return rows[finding.Finding]{report.FindingColumns, len(r.Findings), func(i int) finding.Finding { return r.Findings[i] }}
 }
 
-// CSV writes one table: "pipes", "structures" or "findings", of the design storm.
+func areas(r *analysis.Result, storm *analysis.StormRun) rows[report.AreaRow] {
+	all := report.Areas(r, storm)
+	return rows[report.AreaRow]{report.AreaColumns, len(all), func(i int) report.AreaRow { return all[i] }}
+}
+
+// CSV writes one table: "pipes", "structures", "areas" or "findings", of the design storm.
 func CSV(w io.Writer, r *analysis.Result, table string) error {
 	s := newSink(w)
 	switch table {
 	case "structures":
 		writeCSV(s, structures(r, &r.Design))
+	case "areas":
+		writeCSV(s, areas(r, &r.Design))
 	case "findings":
 		writeCSV(s, findings(r))
 	default:

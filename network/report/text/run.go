@@ -13,13 +13,16 @@ import (
 // Options say what is printed of a run.
 type Options struct {
 	Markdown bool
-	Table    string // "pipes", "structures", "findings", or "" for all
+	Table    string // "areas", "pipes", "structures", "findings", or "" for all
 }
 
 // Run prints a run.
 func Run(w io.Writer, r *analysis.Result, o Options) error {
 	p := &printer{w: w, markdown: o.Markdown, style: StyleOf(r)}
 	p.heading(report.Heading(r))
+	if o.Table == "" || o.Table == "areas" {
+		p.table("Areas", makeGrid(p.style, report.AreaColumns, report.Areas(r, &r.Design)))
+	}
 	if o.Table == "" || o.Table == "pipes" {
 		pipeTables(p, r, &r.Design, report.PipeGroups, "")
 		if r.Check != nil {
