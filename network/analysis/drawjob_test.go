@@ -157,10 +157,10 @@ func (d draw) settings(j *drawnJob) {
 	}
 	criteria := map[string][]string{
 		"size_change": {`"inverts"`, `"0.8-points"`}, "velocity_basis": {`"design"`}, "max_depth_ratio": {"0.5", "0.8"}, "max_velocity": {"3", "6"},
-		"max_slope": {"0.02"}, "least_fall": {"0", "0.05"}, "min_cover": {"0.5", "2.005"},
+		"max_slope": {"0.02"}, "least_fall": {"0", "0.05"}, "min_cover": {"0.5", "2.005"}, "size_for": {`"grade-line"`},
 	}
 	pick := func(from map[string][]string) {
-		for _, key := range []string{"check_period", "frequency_factor", "hold_upstream_peak", "least_fall", "max_depth_ratio", "max_slope", "max_velocity", "min_cover", "peak", "size_change", "travel_velocity", "uplift", "velocity_basis"} {
+		for _, key := range []string{"check_period", "frequency_factor", "hold_upstream_peak", "least_fall", "max_depth_ratio", "max_slope", "max_velocity", "min_cover", "peak", "size_change", "size_for", "travel_velocity", "uplift", "velocity_basis"} {
 			if words, ok := from[key]; ok && d.oneIn(3, key) {
 				j.settings = append(j.settings, key+" = "+d.of(key, words...))
 			}
@@ -169,6 +169,9 @@ func (d draw) settings(j *drawnJob) {
 	pick(storm)
 	j.settings = append(j.settings, "[criteria]")
 	pick(criteria)
+	if d.oneIn(2, "another loss") {
+		j.settings = append(j.settings, "[grade]", "structure_loss = "+d.of("loss", `"none"`, `"coefficient"`))
+	}
 }
 
 // dialect is how a sheet is written down.
