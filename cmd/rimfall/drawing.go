@@ -16,7 +16,7 @@ import (
 // drawingFlags are the flags of the commands that draw.
 type drawingFlags struct {
 	out, paper       string
-	storm            float64
+	storm, scale     float64
 	size, pdf, force bool
 }
 
@@ -27,6 +27,7 @@ func (d *drawingFlags) addTo(cmd *cobra.Command) {
 	f.StringVar(&d.out, "out", "", "write to `FILE.svg`, or the sheets into a folder; without it a single sheet goes to standard output")
 	f.StringVar(&d.paper, "paper", "", "size of the paper: "+strings.Join(papers, ", ")+" (default by the job's units: a3 or ansi-b)")
 	f.Float64Var(&d.storm, "storm", 0, "design storm in `years`, in place of the job's")
+	f.Float64Var(&d.scale, "scale", 0, "scale along the ground: 40 for 1 in = 40 ft, 500 for 1:500 (default: the largest that fits)")
 	f.BoolVar(&d.size, "size", false, "choose first what is blank, as the command size does")
 	f.BoolVar(&d.pdf, "pdf", false, "make PDF by Debian's rsvg-convert (package "+converterPackage+"); text stays text")
 	f.BoolVar(&d.force, "force", false, "replace files of --out that exist")
@@ -45,6 +46,11 @@ func paperNames() []string {
 func (d *drawingFlags) run(a *app, cmd *cobra.Command, dir string) (*analysis.Result, drawing.Paper, error) {
 	if cmd.Flags().Changed("storm") && !(d.storm > 0) {
 		return nil, drawing.Paper{}, usageError{"--storm takes a return period in years, over 0"}
+	}
+	for _, name := range []string{"scale", "vertical-scale"} {
+		if v, err := cmd.Flags().GetFloat64(name); err == nil && cmd.Flags().Changed(name) && !(v > 0) {
+			return nil, drawing.Paper{}, usageError{"--" + name + " takes a number over 0: 40 for 1 in = 40 ft, 500 for 1:500"}
+		}
 	}
 	d.pdf = d.pdf || strings.EqualFold(filepath.Ext(d.out), ".pdf")
 	r, err := a.runJob(dir, analysis.Options{Size: d.size, ReturnPeriod: d.storm})

@@ -26,7 +26,7 @@ their pipes, and named.`,
 			if err != nil {
 				return err
 			}
-			sheet, notes, err := drawing.Plan(r, drawing.PlanOptions{Paper: paper})
+			sheet, notes, err := drawing.Plan(r, drawing.PlanOptions{Paper: paper, Scale: d.scale})
 			if err != nil {
 				return err
 			}

@@ -15,6 +15,7 @@ import (
 func (a *app) profileCommand() *cobra.Command {
 	var d drawingFlags
 	var from string
+	var up float64
 	cmd := &cobra.Command{
 		Use:   "profile JOB",
 		Short: "Draw profiles with their grade lines and tables of levels",
@@ -28,14 +29,14 @@ is too long for one sheet goes on at a match line.
 Ground between structures comes from ground.csv (pipe, station, elevation), crossing
 services from crossings.csv (pipe, station, name, top, bottom), where the job has them;
 their stations count along the pipe from its upper end.`,
-		Example: "  rimfall profile examples/orchard-rise --size --from Q-1 > profile.svg\n  rimfall profile orchard-rise-sized --out profiles\n  rimfall profile JOB --out profiles.pdf",
+		Example: "  rimfall profile examples/orchard-rise --size --from Q-1 > profile.svg\n  rimfall profile orchard-rise-sized --out profiles\n  rimfall profile JOB --scale 40 --vertical-scale 4 --out profiles.pdf",
 		Args:    oneJob,
 		RunE: func(cmd *cobra.Command, args []string) error {
 			r, paper, err := d.run(a, cmd, args[0])
 			if err != nil {
 				return err
 			}
-			sheets, unknown, err := drawing.Profiles(r, drawing.ProfileOptions{Paper: paper, From: from})
+			sheets, unknown, err := drawing.Profiles(r, drawing.ProfileOptions{Paper: paper, From: from, Along: d.scale, Up: up})
 			var noSuch drawing.UnknownStructure
 			if errors.As(err, &noSuch) {
 				return fault.List{{File: filepath.Join(args[0], r.Job.Settings.Files["structures"]), Text: noSuch.Error()}}
@@ -53,6 +54,7 @@ their stations count along the pipe from its upper end.`,
 		},
 	}
 	d.addTo(cmd)
+	cmd.Flags().Float64Var(&up, "vertical-scale", 0, "upright scale: 4 for 1 in = 4 ft, 50 for 1:50 (default: the largest that fits)")
 	cmd.Flags().StringVar(&from, "from", "", "draw the way from the structure `ID` to its outfall only")
 	return cmd
 }

@@ -4,6 +4,7 @@ import (
 	"errors"
 	"fmt"
 	"math"
+	"slices"
 	"strings"
 
 	"rimfall/network"
@@ -12,7 +13,8 @@ import (
 
 // PlanOptions say how the plan is drawn.
 type PlanOptions struct {
-	Paper Paper // the zero value: usual for the units
+	Paper Paper   // the zero value: usual for the units
+	Scale float64 // 40 for 1 in = 40 ft, 500 for 1:500; zero: chosen
 }
 
 // PlanNotes say what the plan does not show.
@@ -38,7 +40,7 @@ type plan struct {
 	notes    PlanNotes
 }
 
-// Plan draws the plan of a run: x to the right, y upwards.
+// Plan draws the plan of a run: x to the right, y upwards. The error is [ErrNoCoordinates] or a [NoScale].
 func Plan(result *analysis.Result, o PlanOptions) (Sheet, PlanNotes, error) {
 	r := newRun(result)
 	if o.Paper.Name == "" {
@@ -50,7 +52,9 @@ func Plan(result *analysis.Result, o PlanOptions) (Sheet, PlanNotes, error) {
 	}
 	p := &plan{sheet: newSheet(o.Paper, "Plan of "+r.Job.Settings.Title), r: r}
 	p.marks = r.marks
-	p.fitIn(extent)
+	if err := p.fitIn(extent, o.Scale); err != nil {
+		return Sheet{}, PlanNotes{}, err
+	}
 	p.spans()
 	p.draw()
 	return Sheet{"plan", p.Canvas}, p.notes, nil
@@ -70,23 +74,34 @@ func planExtent(n *network.Network) (extent Box, ok bool) {
 // planMargin is kept around the structures for labels, mm; findingsWidth is that of the list of findings.
 const planMargin, findingsWidth = 16.0, 92.0
 
-// fitIn chooses the largest customary scale at which all structures fit, and puts them in the middle.
-func (p *plan) fitIn(extent Box) {
+// fitIn takes the scale that is asked for, or the largest customary one at which all structures fit, and puts them in the middle.
+func (p *plan) fitIn(extent Box, fixed float64) error {
 	p.box = p.body
 	if len(p.marks) > 0 {
 		p.box.Right -= findingsWidth
 	}
-	for _, s := range scales(p.r.units, firstScale(p.r.units)) {
-		p.scale = s
-		if extent.width()*s.mm <= p.box.width()-2*planMargin && extent.height()*s.mm <= p.box.height()-2*planMargin {
-			break
+	fits := func(s scale) bool {
+		return extent.width()*s.mm <= p.box.width()-2*planMargin && extent.height()*s.mm <= p.box.height()-2*planMargin
+	}
+	if fixed > 0 {
+		p.scale = newScale(p.r.units, fixed)
+		if !fits(p.scale) {
+			return NoScale{"the network does not fit on " + p.paper.Title + " at the scale that is asked for; take a smaller scale, that is a larger number, or larger paper"}
 		}
+	} else {
+		all := scales(p.r.units, firstScale(p.r.units))
+		i := slices.IndexFunc(all, fits)
+		if i < 0 {
+			return NoScale{"the coordinates of the structures lie too far apart for any drawing"}
+		}
+		p.scale = all[i]
 	}
 	p.origin = Point{
 		(extent.Left+extent.Right)/2 - p.box.width()/2/p.scale.mm,
 		(extent.Top+extent.Bottom)/2 + p.box.height()/2/p.scale.mm,
 	}
 	p.place = newPlacer(p.box.grown(-0.8))
+	return nil
 }
 
 // at is the place of a structure on the sheet; ok is false where it has no coordinates.

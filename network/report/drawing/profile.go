@@ -13,6 +13,9 @@ import (
 type ProfileOptions struct {
 	Paper Paper
 	From  string // id of a structure: only the way from there to its outfall
+
+	// Along and Up fix the scales, as agencies do: 40 for 1 in = 40 ft, 500 for 1:500. Zero: chosen.
+	Along, Up float64
 }
 
 // UnknownStructure says that a network has no such structure.
@@ -27,7 +30,8 @@ func (e UnknownStructure) Error() string {
 }
 
 // Profiles draws the profiles of a run: a sheet for each line, or several where a line is too long for one. unknown names
-// the lines of which no level is known, so that there is nothing to draw. The error is an [UnknownStructure].
+// the lines of which no level is known, so that there is nothing to draw. The error is an
+// [UnknownStructure] or a [NoScale].
 func Profiles(result *analysis.Result, o ProfileOptions) (sheets []Sheet, unknown []string, err error) {
 	r := newRun(result)
 	if o.Paper.Name == "" {
@@ -44,7 +48,11 @@ func Profiles(result *analysis.Result, o ProfileOptions) (sheets []Sheet, unknow
 			unknown = append(unknown, l.title(r.Network))
 			continue
 		}
-		drawn = append(drawn, drawLine(r, l, o.Paper)...)
+		parts, err := drawLine(r, l, o)
+		if err != nil {
+			return nil, nil, err
+		}
+		drawn = append(drawn, parts...)
 	}
 	for i := range drawn {
 		drawn[i].finish(i, len(drawn))

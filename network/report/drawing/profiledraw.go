@@ -7,16 +7,19 @@ import (
 )
 
 // drawLine draws a line on as many sheets as it needs. Title and notes come later, when all sheets are counted.
-func drawLine(r *run, l *line, paper Paper) []profileSheet {
-	a := newLayout(r, l, paper)
+func drawLine(r *run, l *line, o ProfileOptions) ([]profileSheet, error) {
+	a, err := newLayout(r, l, o)
+	if err != nil {
+		return nil, err
+	}
 	var sheets []profileSheet
 	for i, p := range a.parts {
-		s := newSheet(paper, "Profile of "+l.title(r.Network))
+		s := newSheet(o.Paper, "Profile of "+l.title(r.Network))
 		g := newGraph(s, r, l, p, &a)
 		g.draw(i)
 		sheets = append(sheets, profileSheet{g, i, len(a.parts)})
 	}
-	return sheets
+	return sheets, nil
 }
 
 // profileSheet is sheet i of the sheets of a line.

@@ -28,7 +28,10 @@ func newGraph(s *sheet, r *run, l *line, p part, a *layout) *graph {
 	g.box = Box{s.body.Left + headColumn, top, s.body.Right - levelColumn, top + graphHeight(s.paper, &a.table)}
 	length := (l.stations[p.last] - l.stations[p.first]) * a.along.mm
 	g.left = (g.box.Left + g.box.Right - length) / 2
-	low, high, _ := levels(r, l, p)
+	low, high, ok := levels(r, l, p)
+	if !ok { // nothing is known on this sheet; the line as a whole has levels
+		low, high, _ = levels(r, l, part{0, len(l.pipes)})
+	}
 	spare := g.box.height()/a.up.mm - (high - low)
 	g.low = low - 0.6*spare
 	places := make([]float64, p.last-p.first+1)

@@ -1,6 +1,7 @@
 package drawing
 
 import (
+	"fmt"
 	"math"
 
 	"rimfall/network"
@@ -50,18 +51,49 @@ func graphHeight(p Paper, t *table) float64 {
 	return p.Height - 2*edge - stripHeight - nameBand - stationBand - fanBand - float64(t.rows())*rowHeight - tableFoot
 }
 
-// newLayout chooses the scales: along the line the largest at which it fits on one sheet, or on the fewest; upright the
-// largest at which every sheet has room for its levels.
-func newLayout(r *run, l *line, paper Paper) layout {
+// NoScale says that a drawing does not fit on its paper at the scale that was asked for.
+type NoScale struct{ Text string }
+
+func (e NoScale) Error() string { return e.Text }
+
+// newLayout chooses the scales that are not asked for: along the line the largest at which it fits on one sheet, or on the
+// fewest; upright the largest at which every sheet has room for its levels.
+func newLayout(r *run, l *line, o ProfileOptions) (layout, error) {
 	t := newTable(r, l)
 	a := layout{table: t, gaps: t.gaps()}
-	u := r.units
+	height := graphHeight(o.Paper, &t) - spareHeight
+	if o.Up > 0 {
+		a.up = newScale(r.units, o.Up)
+	}
+	fits := func(p part) bool {
+		low, high, ok := levels(r, l, p)
+		return o.Up <= 0 || !ok || (high-low)*a.up.mm <= height
+	}
+	if !a.chooseAlong(l, r.units, o, fits) {
+		return a, NoScale{fmt.Sprintf("a pipe of %s does not fit on %s at the scale that is asked for; take a smaller scale, that is a larger number, or larger paper",
+			l.title(r.Network), o.Paper.Title)}
+	}
+	if o.Up <= 0 {
+		a.chooseUp(r, l, height)
+	}
+	a.exaggeration = a.up.mm / a.along.mm
+	return a, nil
+}
+
+// chooseAlong sets the scale along the line and the parts into which it is cut. ok is false where a single pipe does not
+// fit at the scale that is asked for.
+func (a *layout) chooseAlong(l *line, u units.System, o ProfileOptions, fits func(part) bool) (ok bool) {
+	if o.Along > 0 {
+		a.along = newScale(u, o.Along)
+		a.parts, ok = a.split(l, a.along, across(o.Paper), fits)
+		return ok
+	}
 	smallest := smallestScaleFeet
 	if u.Name == units.SI.Name {
 		smallest = smallestScaleMetres
 	}
 	for _, s := range scales(u, firstScale(u)) {
-		parts, ok := a.split(l, s, across(paper))
+		parts, ok := a.split(l, s, across(o.Paper), fits)
 		if ok && (a.parts == nil || len(parts) < len(a.parts)) {
 			a.parts, a.along = parts, s
 		}
@@ -69,31 +101,37 @@ func newLayout(r *run, l *line, paper Paper) layout {
 			break
 		}
 	}
-	height := graphHeight(paper, &t)
-	for _, s := range scales(u, firstScale(u)/10) {
-		a.up, a.exaggeration = s, s.mm/a.along.mm
-		if a.exaggeration <= greatestRatio*(1+1e-9) && a.tallest(r, l) <= (height-spareHeight)/s.mm {
-			break
-		}
-	}
-	return a
+	return a.parts != nil
 }
 
-// split cuts a line at structures into parts that fit across a sheet at a scale: each as long as it can be. ok is false
-// where a single pipe does not fit.
-func (a *layout) split(l *line, s scale, width float64) (parts []part, ok bool) {
+// chooseUp sets the upright scale.
+func (a *layout) chooseUp(r *run, l *line, height float64) {
+	tallest := a.tallest(r, l)
+	for _, s := range scales(r.units, firstScale(r.units)/10) {
+		a.up = s
+		if s.mm/a.along.mm <= greatestRatio*(1+1e-9) && tallest*s.mm <= height {
+			return
+		}
+	}
+}
+
+// split cuts a line at structures into parts that fit on a sheet at a scale: each as long as it can be. ok is false where a
+// single pipe does not fit.
+func (a *layout) split(l *line, s scale, width float64, fits func(part) bool) (parts []part, ok bool) {
 	first, columns := 0, 0.0
+	room := func(k int) bool {
+		return (l.stations[k+1]-l.stations[first])*s.mm <= width && columns <= width && fits(part{first, k + 1})
+	}
 	for k := range l.pipes {
 		columns += a.gaps[k]
-		if (l.stations[k+1]-l.stations[first])*s.mm <= width && columns <= width {
+		if room(k) {
 			continue
 		}
-		if k == first {
-			return nil, false
+		if k > first {
+			parts = append(parts, part{first, k})
+			first, columns = k, a.gaps[k]
 		}
-		parts = append(parts, part{first, k})
-		first, columns = k, a.gaps[k]
-		if (l.stations[k+1]-l.stations[k])*s.mm > width {
+		if !room(k) {
 			return nil, false
 		}
 	}

@@ -29,7 +29,7 @@ func scales(u units.System, first float64) []scale {
 		steps = stepsMetres
 	}
 	var list []scale
-	for tens := 0.1; tens < 2e6; tens *= 10 {
+	for tens := 0.1; tens < 1e15; tens *= 10 {
 		for _, s := range steps {
 			list = append(list, newScale(u, s*tens))
 			if u.Name == units.US.Name && s == 10 && tens >= 1 {

@@ -1,6 +1,7 @@
 package drawing_test
 
 import (
+	"errors"
 	"fmt"
 	"os"
 	"path/filepath"
@@ -84,6 +85,31 @@ func TestALongLineGoesOnAtMatchLines(t *testing.T) {
 	}
 	if pipes != len(r.Network.Pipes) {
 		t.Errorf("the tables have %d pipes, the network %d", pipes, len(r.Network.Pipes))
+	}
+}
+
+// At fixed scales a line goes on where its length or its levels no longer fit; a pipe that is too long by itself is an error.
+func TestFixedScalesHoldOnEverySheet(t *testing.T) {
+	r := runJob(t, writeJob(t, 60, false, 150))
+	sheets, _, err := drawing.Profiles(r, drawing.ProfileOptions{Along: 40, Up: 4})
+	if err != nil {
+		t.Fatal(err)
+	}
+	if len(sheets) < 60*150/40/12 {
+		t.Errorf("59 pipes of 150 ft at 1 in = 40 ft stand on %d sheets", len(sheets))
+	}
+	for _, s := range sheets {
+		holdSheet(t, s)
+		if all := strings.Join(texts(t, s), " "); !strings.Contains(all, "horizontal 1 in = 40 ft, vertical 1 in = 4 ft; vertical exaggeration 10 : 1") {
+			t.Errorf("%s does not state the scales that were asked for", s.Name)
+		}
+	}
+	var no drawing.NoScale
+	if _, _, err := drawing.Profiles(r, drawing.ProfileOptions{Along: 5}); !errors.As(err, &no) {
+		t.Errorf("150 ft of pipe, 30 in long on paper, gave %v", err)
+	}
+	if _, _, err := drawing.Plan(r, drawing.PlanOptions{Scale: 10}); !errors.As(err, &no) {
+		t.Errorf("a plan too large for its paper gave %v", err)
 	}
 }
 
