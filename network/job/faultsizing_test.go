@@ -39,6 +39,20 @@ P2,B,O,100,circle,cast-iron
 pipes.csv:2:1: pipe P1 has no size, and no arch of brick is in the catalogue to choose from: write the size, or list sizes in catalog.csv
 pipes.csv:3:1: pipe P2 has no size, and no circle of cast-iron is in the catalogue to choose from: write the size, or list sizes in catalog.csv
 `},
+		{"the list of sizes has a bad number and a size twice", `
+-- catalog.csv --
+shape,span,wall
+circle,12,2
+circle,twelve,2
+circle,12,3
+-- pipes.csv --
+id,from,to,length
+P1,A,B,100
+P2,B,O,100
+`, `
+catalog.csv:3:8: span "twelve" is not a number: a plain decimal such as 36 or 2.5 is wanted
+catalog.csv:4:8: size 12 of series "own sizes" stands in line 2 already: give it another series or take one out
+`},
 		{"blank sizes, slopes and inverts are taken", `
 -- pipes.csv --
 id,from,to,length
