@@ -111,6 +111,11 @@ func TestNoticesOfWhatWasAssumedOrNotJudged(t *testing.T) { judge(t, noticeRules
 
 var noticeRules = []ruleCase{
 	{
+		rule: "existing-chosen", subject: "P1", size: true,
+		found: edits{pipeHeading, pipeHeading + ",status", p1, "P1,A,B,100,12,2,,,existing"}, value: open, limit: open,
+		not: edits{pipeHeading, pipeHeading + ",status", p1, p1 + ",existing"},
+	},
+	{
 		rule: "time-assumed", subject: "a1",
 		found: edits{a1, "a1,A,1,0.4,"}, value: 5, limit: open,
 		not: edits{a1, "a1,A,1,0,"}, // an area that sheds nothing sets no time

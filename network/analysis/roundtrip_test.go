@@ -18,7 +18,7 @@ import (
 )
 
 // ofSizing are the rules that speak of choosing, which check does not do.
-var ofSizing = []string{"bounds-cross", "no-size-carries", "grade-line-size"}
+var ofSizing = []string{"bounds-cross", "no-size-carries", "grade-line-size", "existing-chosen"}
 
 func TestCheckRepeatsEveryNumberOfSizeToTheLastBit(t *testing.T) {
 	base := t.TempDir()

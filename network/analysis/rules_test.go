@@ -118,6 +118,8 @@ func number(t *testing.T, what string, got float64, ok bool, want float64) {
 
 // P1 and a1 as they stand in the sound job, for the edits.
 const (
+	pipeHeading = "id,from,to,length,size,wall,slope,invert_upper"
+
 	p1 = "P1,A,B,100,12,2,0.005,95"
 	p2 = "P2,B,O,100,15,2.25,0.005,94.2"
 	a1 = "a1,A,1,0.4,10"

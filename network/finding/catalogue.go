@@ -140,6 +140,12 @@ var rules = []Rule{
 		Warning, "lowest_invert, invert_upper, invert_lower", common,
 	},
 	{
+		"existing-chosen", "existing pipe with chosen data",
+		"the pipe is existing, and its size or levels were blank, so that they were chosen as for a new one",
+		"what lies in the ground is not as one would design it",
+		Warning, "pipes.csv status", common,
+	},
+	{
 		"drop-structure", "large fall through a structure",
 		"a pipe enters higher above the lowest invert out than the greatest plain drop",
 		"falling water wears the floor and makes entry unsafe; a drop structure is called for",

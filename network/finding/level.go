@@ -139,6 +139,14 @@ func (j *judge) boundsCross() {
 	}
 }
 
+func (j *judge) existingChosen() {
+	for _, r := range j.Remarks {
+		if r.Kind == size.ExistingChosen {
+			j.add("existing-chosen", j.Network.Pipes[r.Pipe].ID, network.Maybe{}, network.Maybe{}, "the pipe is existing, and its size or levels were blank and have been chosen: survey them")
+		}
+	}
+}
+
 // dropStructure measures from each pipe in to the lowest invert out.
 func (j *judge) dropStructure() {
 	limit := j.Criteria.MaxDrop

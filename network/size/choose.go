@@ -46,8 +46,9 @@ type RemarkKind int8
 
 // What can be found while choosing.
 const (
-	NoSizeCarries RemarkKind = iota // the largest size was taken
-	BoundsCross                     // an upper bound of the upper invert gave way to a lower one
+	NoSizeCarries  RemarkKind = iota // the largest size was taken
+	BoundsCross                      // an upper bound of the upper invert gave way to a lower one
+	ExistingChosen                   // something of a pipe that lies already was chosen
 )
 
 // New prepares a chooser; the pipes of n, as they are now, count as given.
@@ -144,6 +145,9 @@ func (c *Chooser) try(p *network.Pipe, candidate Candidate, flow float64) trial 
 
 // settle writes a trial into its pipe.
 func (c *Chooser) settle(i network.PipeIndex, p *network.Pipe, t trial) {
+	if p.Existing {
+		c.remarks = append(c.remarks, Remark{Pipe: i, Kind: ExistingChosen})
+	}
 	if !p.InvertUpper.OK && t.upper > t.bounds.upperHigh+levelRoom {
 		c.remarks = append(c.remarks, Remark{i, BoundsCross, t.upper, t.bounds.upperHigh})
 	}
