@@ -14,7 +14,6 @@ type barrel struct {
 	surface.Pipe
 	flow   float64
 	depths surface.Depths
-	steep  bool
 }
 
 // barrel prepares a pipe in which water flows. The sweep has found its normal depth already where it is under capacity.
@@ -32,7 +31,6 @@ func (l *Lines) barrel(p network.PipeIndex) barrel {
 		b.depths.Normal, b.depths.HasNormal = b.Manning.NormalDepth(b.Section, b.flow)
 	}
 	b.depths.Critical, b.depths.HasCritical = pipeflow.CriticalDepth(b.Section, b.Gravity, b.flow)
-	b.steep = b.IsSteep(b.flow, b.depths)
 	return b
 }
 
@@ -92,7 +90,7 @@ func (l *Lines) discharge(p network.PipeIndex, water network.Maybe, profile *sur
 	if water.OK {
 		depth = max(0, water.V-pipe.InvertLower.V)
 	}
-	if !b.steep {
+	if !b.IsSteep(b.flow, b.depths) {
 		depth = max(depth, l.settings.Start.depth(b.critical(), b.Section.Rise()))
 	}
 	l.run(p, &b, depth, profile)

@@ -16,7 +16,7 @@ type path struct {
 }
 
 // settled is the share of the depth within which a surface counts as having come to normal depth.
-const settled = 1e-7
+const settled = 1e-6
 
 // nearly reports whether a depth cannot be told from normal depth.
 func nearly(depth, normal float64) bool {

@@ -42,13 +42,17 @@ func (p *Profile) SolveWith(pipe Pipe, flow float64, c Control, d Depths) error 
 	w := &p.sub.water
 	d, p.Steep = w.classify(d)
 	start, isRapid := c.start(d, p.Steep)
-	if isRapid {
-		p.sup.lay(w, d, p.Steep, start, pipe.Length)
+	if p.Steep && start == d.Critical && c.Level > d.Critical && w.full < w.slope {
+		p.meet(d)
+	} else {
+		if isRapid {
+			p.sup.lay(w, d, p.Steep, start, pipe.Length)
+		}
+		if !p.Steep || c.Level > d.Critical {
+			p.sub.lay(d, p.Steep, max(c.Level, d.Critical), pipe.Length)
+		}
+		p.join(d, isRapid)
 	}
-	if !p.Steep || c.Level > d.Critical {
-		p.sub.lay(d, p.Steep, max(c.Level, d.Critical), pipe.Length)
-	}
-	p.join(d, isRapid)
 	if !w.closed && max(p.Lower, p.Upper, p.JumpAfter) >= w.rise {
 		return ErrOvertops
 	}
@@ -97,13 +101,17 @@ func (p *Profile) join(d Depths, isRapid bool) {
 		p.hold(d, length)
 		p.Upper, p.Drowned = p.sub.depth(length), p.Steep
 	default:
-		secant := low + (high-low)*excessLow/(excessLow-excessHigh)
-		p.Jump, p.HasJump = jump(&p.sub, &p.sup, low, high, secant), true
-		p.hold(d, p.Jump)
-		p.Regime, p.Upper = Jumps, p.sup.start
-		p.Above = p.sub.water.rapidCurve(d, p.Steep, p.sup.start)
-		p.JumpBefore, p.JumpAfter = p.sup.depth(p.Jump), p.sub.depth(p.Jump)
+		p.stand(d, low, high, low+(high-low)*excessLow/(excessLow-excessHigh))
 	}
+}
+
+// stand puts the jump between two distances from the lower end, beginning to look at a guess.
+func (p *Profile) stand(d Depths, low, high, guess float64) {
+	p.Jump, p.HasJump = jump(&p.sub, &p.sup, low, high, guess), true
+	p.hold(d, p.Jump)
+	p.Regime, p.Upper = Jumps, p.sup.start
+	p.Above = p.sub.water.rapidCurve(d, p.Steep, p.sup.start)
+	p.JumpBefore, p.JumpAfter = p.sup.depth(p.Jump), p.sub.depth(p.Jump)
 }
 
 // leave is a rapid stream that runs out of the lower end.
