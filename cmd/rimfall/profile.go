@@ -22,9 +22,9 @@ func (a *app) profileCommand() *cobra.Command {
 		Long: `profile draws a profile sheet for every line of the network, or for the way from one
 structure to its outfall: ground, structures, pipes to scale with their walls, the
 hydraulic and energy grade lines of both storms, jumps, crossing services, and under
-it a table of levels. The longest way to each outfall is line A; the longest way up
-each branch is a line of its own, so that every pipe stands on one sheet. A line that
-is too long for one sheet goes on at a match line.
+it a table of levels. Line A is the longest way to the first outfall; the longest way up
+each branch is a line of its own, so that every pipe is drawn once. A line that is too
+long for one sheet goes on at a match line.
 
 Ground between structures comes from ground.csv (pipe, station, elevation), crossing
 services from crossings.csv (pipe, station, name, top, bottom), where the job has them;
