@@ -92,6 +92,7 @@ func isEquation(key string) bool {
 
 // readEquation reads one equation, whose keys begin with block.
 func (r *reader) readEquation(d document, block string, s *Settings) equation {
+	before := len(r.faults)
 	e := equation{key: block, Equation: hydrology.Equation{Unit: hydrology.IntensityUnit(s.Units.Intensity), Constants: []hydrology.Constants{{}}}}
 	terms := map[string]*hydrology.Term{}
 	var order []string // prefixes of the terms, as they come
@@ -118,8 +119,18 @@ func (r *reader) readEquation(d document, block string, s *Settings) equation {
 	for _, prefix := range order {
 		e.Constants[0].Terms = append(e.Constants[0].Terms, *terms[prefix])
 	}
-	r.judgeEquation(d, block, &e)
+	if len(r.faults) == before {
+		r.judgeEquation(d, block, &e)
+	}
+	if e.Shortest == 0 && endless(e.Constants[0]) {
+		e.Shortest = s.Storm.MinimumTime // no time is under it
+	}
 	return e
+}
+
+// endless tells equations that have no intensity at 0 min.
+func endless(c hydrology.Constants) bool {
+	return len(c.Terms) == 0 || slices.ContainsFunc(c.Terms, func(t hydrology.Term) bool { return t.Shift <= 0 })
 }
 
 // equationSetting reads a setting of an equation that belongs to no term.
