@@ -1,6 +1,7 @@
 package job
 
 import (
+	"bytes"
 	"fmt"
 	"os"
 	"slices"
@@ -80,7 +81,7 @@ func (r *reader) looksLikeTable(name string, content []byte) bool {
 		return true
 	}
 	ignored := r.faults[:0:0]
-	t := newTable("rainfall", name, content, &ignored)
+	t := newTable("rainfall", name, bytes.TrimPrefix(content, []byte("\xef\xbb\xbf")), &ignored)
 	if !t.readHeadings() {
 		return true
 	}
