@@ -20,12 +20,7 @@ func (l *Lines) coefficient(s network.StructureIndex, m *mouth) float64 {
 	if l.network.Structures[s].Kind == network.Inlet {
 		losses = inletLosses
 	}
-	main, most := none, 0.0
-	for _, in := range l.network.PipesIn(s) {
-		if flow := l.flows.Pipes[in].Flow; flow > most && !l.plunges(in, m) {
-			main, most = in, flow
-		}
-	}
+	main := l.mainIn(s, m)
 	if main == none {
 		return losses[0].coefficient
 	}
