@@ -1,6 +1,9 @@
 package drawing
 
-import "math"
+import (
+	"math"
+	"slices"
+)
 
 // Box is an upright rectangle on the sheet.
 type Box struct{ Left, Top, Right, Bottom float64 }
@@ -115,14 +118,24 @@ func (p *placer) takeLine(a, b Point, width float64) { p.taken.addLine(a, b, wid
 // passLine notes a thin line.
 func (p *placer) passLine(a, b Point) { p.lines.addLine(a, b, 0.2) }
 
-// free tells whether shapes are inside the area and meet nothing that is taken.
+// free tells whether shapes are inside the area and meet nothing that is taken. From other labels even the upright boxes
+// keep apart: a label in the corner of the box around a turned one would be hard to read.
 func (p *placer) free(shapes []quad) bool {
 	for _, q := range shapes {
-		if !p.area.holds(q.box()) || p.taken.count(q, 1) > 0 {
+		if !p.area.holds(q.box()) || p.taken.count(q, 1) > 0 || p.texts.touches(q.box()) {
 			return false
 		}
 	}
 	return true
+}
+
+// touches tells whether the box around a shape meets a box.
+func (x index) touches(b Box) (found bool) {
+	squares(b, func(s square) bool {
+		found = slices.ContainsFunc(x[s], func(o boxed) bool { return b.meets(o.box) })
+		return !found
+	})
+	return found
 }
 
 // crossed counts thin lines under shapes.
