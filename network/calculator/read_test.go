@@ -20,7 +20,7 @@ func TestValuesMayHaveAnotherUnit(t *testing.T) {
 	near(t, "4 ft in inches", us.Conduit.Size.Rise, 48, 0)
 	near(t, "18 in in feet", us.Depth.V, 1.5, 1e-15)
 	near(t, "40 L/s in cfs", us.Flow.V, 0.04/0.028316846592, 1e-12) // 1 ft³ is 0.028316846592 m³ exactly
-	near(t, "1 m/s in ft/s", us.Velocity.V, 1/0.3048, 1e-14) // to fifteen digits
+	near(t, "1 m/s in ft/s", us.Velocity.V, 1/0.3048, 1e-14)        // to fifteen digits
 	near(t, "0.5 percent", us.Slope.V, 0.005, 1e-18)
 	si := read(calculator.Given{Units: "si", Size: "24in", Depth: "300mm", Flow: "900gpm"})
 	near(t, "24 in in mm", si.Conduit.Size.Rise, 609.6, 1e-12)

@@ -19,7 +19,6 @@ type section struct {
 	words    map[string]word
 	switches map[string]func(*Settings, bool)
 	texts    []string // keys that hold free text, read elsewhere
-	free     bool     // any key, all of them text
 }
 
 var (

@@ -102,8 +102,10 @@ func (g grid) draw(w io.Writer, r tw.Renderer, padding tw.Padding) error {
 		Alignment:  tw.CellAlignment{PerColumn: align},
 		Padding:    tw.CellPadding{Global: padding},
 	}
-	table := tablewriter.NewTable(w, tablewriter.WithRenderer(r), tablewriter.WithConfig(tablewriter.Config{Header: cell, Row: cell,
-		Behavior: tw.Behavior{TrimSpace: tw.Off}}))
+	table := tablewriter.NewTable(w, tablewriter.WithRenderer(r), tablewriter.WithConfig(tablewriter.Config{
+		Header: cell, Row: cell,
+		Behavior: tw.Behavior{TrimSpace: tw.Off},
+	}))
 	table.Header(g.head)
 	if err := table.Bulk(g.rows); err != nil {
 		return err
