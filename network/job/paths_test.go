@@ -168,8 +168,8 @@ a1,1,sheet-nrcs,100,0.01,0.24
 	}
 }
 
-// FuzzPaths: any paths.csv gives a job or a list of faults.
-func FuzzPaths(f *testing.F) {
+// FuzzFlowPaths: any paths.csv gives a job or a list of faults.
+func FuzzFlowPaths(f *testing.F) {
 	f.Add("area,order,kind,length,slope,n,section\na1,1,channel,1050,0.012,0.04,bottom 0.3 depth 0.7 side 2\n")
 	f.Add("area;order;kind;length;slope;surface\na1;1;sheet;30,5;0,01;dense grasses\na1;2;shallow;100;0.02;unpaved\n")
 	f.Add("area,order,kind,length,velocity,curve_number\na1,2,velocity,600,1,\na1,1,nrcs-lag,600,1,75\n")

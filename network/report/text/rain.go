@@ -120,11 +120,19 @@ func errorGrid(s *rain.Source) grid {
 	for row, d := range s.Table.Durations {
 		cells := []string{strconv.FormatFloat(d, 'f', -1, 64)}
 		for _, e := range fitted {
-			cells = append(cells, fmt.Sprintf("%+.1f", 100*e.Worst(row)))
+			cells = append(cells, signed(100*e.Worst(row)))
 		}
 		g.rows = append(g.rows, cells)
 	}
 	return g
+}
+
+// signed prints a percentage with its sign; nothing over is nothing under.
+func signed(percent float64) string {
+	if text := fmt.Sprintf("%+.1f", percent); text != "-0.0" && text != "+0.0" {
+		return text
+	}
+	return "0.0"
 }
 
 // distributionGrid prints depths with their limits in brackets, and how well the distribution fits.
