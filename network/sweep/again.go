@@ -123,20 +123,3 @@ func (a *arrivals) empty() {
 
 // firstSeed is that of newArrivals.
 const firstSeed = 2463534242
-
-// become makes the storm another one, in the room that it has. The corners of rain must not be changed by others.
-func (s *storm) become(rain hydrology.Intensity, minimum float64) {
-	s.rain, s.minimum, s.smooth, s.corners, s.falling = rain, minimum, nil, nil, s.falling[:0]
-	if c, ok := rain.(interface{ Durations() []float64 }); ok {
-		s.corners = c.Durations()
-	}
-	for _, t := range s.corners {
-		i, _ := rain.At(t)
-		s.falling = append(s.falling, i)
-	}
-	if e, ok := rain.(exponent); ok {
-		if _, known := e.Exponent(minimum); known {
-			s.smooth = e
-		}
-	}
-}

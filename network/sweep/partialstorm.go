@@ -22,7 +22,15 @@ type exponent interface {
 }
 
 func newStorm(rain hydrology.Intensity, minimum float64) storm {
-	s := storm{rain: rain, minimum: minimum}
+	var s storm
+	s.become(rain, minimum)
+	return s
+}
+
+// become makes the storm another one, in the room that it has. The corners of rain
+// must not be changed by others.
+func (s *storm) become(rain hydrology.Intensity, minimum float64) {
+	s.rain, s.minimum, s.smooth, s.corners, s.falling = rain, minimum, nil, nil, s.falling[:0]
 	if c, ok := rain.(interface{ Durations() []float64 }); ok {
 		s.corners = c.Durations()
 	}
@@ -36,14 +44,13 @@ func newStorm(rain hydrology.Intensity, minimum float64) storm {
 		}
 	}
 	s.convex = s.smooth == nil || sags(rain, s.smooth, minimum)
-	return s
 }
 
 // A table is convex between its durations, since a power law i = a·t^−e is. An
 // equation is looked at in sagLooks places up to sagLongest, evenly in ln t: its
 // fall −di/dt = i·e/t must nowhere grow.
 const (
-	sagLooks   = 400
+	sagLooks   = 100
 	sagLongest = 1e6 // min, two years
 )
 
