@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"slices"
 
+	"rimfall/hydrology"
 	"rimfall/network"
 	"rimfall/network/fault"
 )
@@ -65,6 +66,9 @@ func (s *Subject) FindHeadroom(o HeadroomOptions) (*Headroom, error) {
 		return nil, err
 	}
 	h.Structures = make([]StructureHeadroom, len(at))
+	if err := s.knows(h.Options.Time); err != nil {
+		return nil, err
+	}
 	part, count := parts(s.Network)
 	slices.SortStableFunc(at, func(a, b network.StructureIndex) int { return int(part[a]) - int(part[b]) })
 	if h.SetAside, err = s.setAside(&h.Options, part, count); err != nil {
@@ -99,6 +103,18 @@ func (o HeadroomOptions) filled() HeadroomOptions {
 		o.Time = DefaultTime
 	}
 	return o
+}
+
+// knows tells whether the rainfall is known for an inlet time.
+func (s *Subject) knows(minutes float64) error {
+	rain, err := s.rain(s.Storm.ReturnPeriod)
+	if err != nil {
+		return err
+	}
+	if _, where := rain.At(minutes); where == hydrology.Beyond {
+		return fault.List{{File: s.Job.Rain.File, Text: fmt.Sprintf("an inlet time of %g min is beyond the last duration of the rainfall; take a shorter one, or add longer durations", minutes)}}
+	}
+	return nil
 }
 
 // asked lists the structures that are asked: one by its id, or all but outfalls.

@@ -56,17 +56,6 @@ func pipeIndex(t testing.TB, n *network.Network, id string) network.PipeIndex {
 	return -1
 }
 
-func structureIndex(t testing.TB, n *network.Network, id string) network.StructureIndex {
-	t.Helper()
-	for i := range n.Structures {
-		if n.Structures[i].ID == id {
-			return network.StructureIndex(i)
-		}
-	}
-	t.Fatalf("no structure %s", id)
-	return -1
-}
-
 // invented is a job of an invented network of any size.
 func invented(t testing.TB, shape networktest.Shape, pipes int) *Subject {
 	t.Helper()
