@@ -258,3 +258,18 @@ func TestRapidInflowIsDissipated(t *testing.T) {
 		t.Errorf("the account begins with %v", account[0])
 	}
 }
+
+// Inverts written to a hundredth and a slope beside them: the pressure line of a full pipe rises by the friction slope
+// times the length, not by what the rounding of the inverts adds.
+func TestRoundedInvertsDoNotBendThePressureLine(t *testing.T) {
+	d := newDrain(units.US)
+	river := d.structure(network.Structure{Kind: network.Outfall, Tailwater: network.Some(110)})
+	head := d.structure(network.Structure{})
+	p := d.pipe(network.Pipe{From: head, To: river, Length: 100, Section: d.circle(24), InvertUpper: network.Some(100.51), InvertLower: network.Some(100)}, 10)
+	d.Pipes[p].Slope = network.Some(0.005)
+	l := d.lines()
+	friction, _ := d.Pipes[p].Manning(d.settings.Manning).SlopeFor(d.Pipes[p].Section, 2, 10)
+	near(t, "rise of the pressure line", l.Pipes[p].HGLUpper-l.Pipes[p].HGLLower, 100*friction, 1e-12)
+	points := l.Trace(p, 4)
+	near(t, "the traced line ends there", points[len(points)-1].HGL, l.Pipes[p].HGLUpper, 1e-12)
+}

@@ -135,9 +135,19 @@ func (l *Lines) run(p network.PipeIndex, b *barrel, depth float64, profile *surf
 	if !line.Steep || line.Drowned {
 		line.Bend = BendLoss(pipe.Bend, upper)
 	}
-	line.HGLUpper = pipe.InvertUpper.V + profile.Upper + line.Bend
+	line.HGLUpper = pipe.InvertUpper.V + profile.Upper + line.Bend + line.skew(pipe)
 	line.EGLUpper = line.HGLUpper + upper
 	line.full = profile.Upper+line.Bend >= b.Section.Rise()*(1-touching)
+}
+
+// skew is by how much the invert of the upper end lies under the one that the slope gives, which may differ by the rounding
+// of a table. The surface is drawn on the slope; the pressure line of a pipe that is full throughout rises by Sf L whatever
+// the inverts, so there it is made up for.
+func (p *Pipe) skew(given *network.Pipe) float64 {
+	if p.Regime != Full {
+		return 0
+	}
+	return given.Slope.V*given.Length - (given.InvertUpper.V - given.InvertLower.V)
 }
 
 // touching is the share of the rise within which water counts as at the crown, above the rounding of a depth there.

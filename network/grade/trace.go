@@ -30,8 +30,9 @@ func (l *Lines) Trace(p network.PipeIndex, parts int) []Point {
 	}
 	var points []Point
 	for _, at := range profile.AppendPoints(nil, parts) {
-		hgl := l.invertAt(p, at.Distance) + at.Depth
-		points = append(points, Point{at.Distance, at.Depth, hgl, hgl + b.head(at.Depth)})
+		depth := at.Depth + line.skew(&l.network.Pipes[p])*at.Distance/b.Length
+		hgl := l.invertAt(p, at.Distance) + depth
+		points = append(points, Point{at.Distance, depth, hgl, hgl + b.head(depth)})
 	}
 	if line.Bend > 0 {
 		points = append(points, Point{points[len(points)-1].Distance, line.HGLUpper - l.network.Pipes[p].InvertUpper.V, line.HGLUpper, line.EGLUpper})
