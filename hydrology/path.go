@@ -16,6 +16,11 @@ type Step struct {
 	Velocity float64 // ft/s or m/s, over the length of the leg
 	Minutes  float64
 	Breaches []Breach
+
+	// The formula in full: Symbol, in Unit, is Constant times the numbers of Given, each to its exponent.
+	Symbol, Unit string
+	Constant     float64
+	Exponents    []float64
 }
 
 // Trial is one round of the kinematic wave: the time of the whole path that was assumed, the storm's intensity
@@ -90,9 +95,11 @@ func stepOf(leg Leg, trials []Trial, s Settings) Step {
 	step := Step{
 		Leg: leg, Method: m, Formula: p.symbols(), Working: p.numbers(),
 		Velocity: p.flowSpeed(leg), Minutes: p.minutes(leg), Breaches: m.breaches(leg, s.System),
+		Symbol: p.symbol, Unit: p.unit, Constant: p.constant,
 	}
 	for _, f := range p.factors {
 		step.Given = append(step.Given, f.Number)
+		step.Exponents = append(step.Exponents, f.exponent)
 	}
 	return step
 }

@@ -83,15 +83,15 @@ func (c *Comparison) settings() {
 	}
 }
 
-// sameRain tells whether both design storms rain alike at the tabulated durations of
-// each. What is no table is taken as it is named by its file.
+// sameRain tells whether both design storms rain alike: at the durations of each, and at
+// some between, since an equation has ends only.
 func (c *Comparison) sameRain() bool {
 	b, okB := c.Before.Job.Curve(c.Before.Design.Storm.ReturnPeriod)
 	a, okA := c.After.Job.Curve(c.After.Design.Storm.ReturnPeriod)
 	if !okB || !okA {
 		return okB == okA
 	}
-	return rainsAlike(b, a, durationsOf(b)) && rainsAlike(b, a, durationsOf(a))
+	return rainsAlike(b, a, durationsOf(b)) && rainsAlike(b, a, durationsOf(a)) && rainsAlike(b, a, sampled)
 }
 
 func rainsAlike(b, a hydrology.Intensity, durations []float64) bool {
@@ -105,7 +105,11 @@ func rainsAlike(b, a hydrology.Intensity, durations []float64) bool {
 	return true
 }
 
-// durationsOf are the tabulated durations of a storm; none where it is no table.
+// sampled are durations at which two storms are looked at, min.
+var sampled = []float64{5, 10, 15, 30, 60, 120, 360}
+
+// durationsOf are the durations of a storm that are known: of a table all, of an equation
+// the ends of its range.
 func durationsOf(rain any) []float64 {
 	if table, ok := rain.(interface{ Durations() []float64 }); ok {
 		return table.Durations()

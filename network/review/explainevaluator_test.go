@@ -84,6 +84,7 @@ func (e *evaluator) single() float64 {
 		"acos(": func(a []float64) float64 { return math.Acos(a[0]) },
 		"cos(":  func(a []float64) float64 { return math.Cos(a[0]) },
 		"sin(":  func(a []float64) float64 { return math.Sin(a[0]) },
+		"exp(":  func(a []float64) float64 { return math.Exp(a[0]) },
 		"ln(":   func(a []float64) float64 { return math.Log(a[0]) },
 		"max(":  func(a []float64) float64 { return extreme(a, 1) },
 		"min(":  func(a []float64) float64 { return -extreme(a, -1) },

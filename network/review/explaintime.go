@@ -121,7 +121,4 @@ func (s *sheet) arrives(at network.StructureIndex) {
 	s.line("t", "the longest time governs", formula.Largest(candidates), run.Time, "min", fromRational)
 }
 
-// timeSource is where the inlet time of an area stands.
-func (s *sheet) timeSource(network.AreaIndex) string { return "areas" }
-
 func (s *sheet) structureID(at network.StructureIndex) string { return s.n.Structures[at].ID }

@@ -6,6 +6,6 @@
 // their place, and as MathML (W3C MathML Core, 2024).
 //
 // A formula has numbers, symbols, + − × / ^ √ and brackets, and the functions sin, cos,
-// acos, ln, min and max. Angles are in radians. A symbol is a word of letters and digits,
+// acos, exp, ln, min and max. Angles are in radians. A symbol is a word of letters and digits,
 // with an index behind an underscore: y_c. Multiplication is always written.
 package formula

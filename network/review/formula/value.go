@@ -7,6 +7,7 @@ var functions = map[string]func(args []float64) float64{
 	"sin":  func(a []float64) float64 { return math.Sin(a[0]) },
 	"cos":  func(a []float64) float64 { return math.Cos(a[0]) },
 	"acos": func(a []float64) float64 { return math.Acos(a[0]) },
+	"exp":  func(a []float64) float64 { return math.Exp(a[0]) },
 	"ln":   func(a []float64) float64 { return math.Log(a[0]) },
 	"min":  func(a []float64) float64 { return fold(a, math.Min) },
 	"max":  func(a []float64) float64 { return fold(a, math.Max) },

@@ -40,7 +40,7 @@ func (w *writer) write(n *node) string {
 	case '×':
 		return w.side(n, 0, products) + " × " + w.side(n, 1, signs)
 	case '/':
-		return w.side(n, 0, products) + "/" + w.tight(&n.args[1])
+		return w.side(n, 0, products) + "/" + w.side(n, 1, signs)
 	case '^':
 		return w.tight(&n.args[0]) + "^" + w.tight(&n.args[1])
 	case '√':
