@@ -128,13 +128,15 @@ func (w *enlarger) lower(s network.StructureIndex) bool {
 	}
 }
 
-// grow enlarges one pipe, and keeps that where it lowers the level by more than a step of the chosen inverts.
+// grow enlarges one pipe, and keeps that where it lowers the level by more than a step of the chosen inverts. Where levels
+// are so high that a step is lost in their rounding, the level has to fall all the same, else the work would not end.
 func (w *enlarger) grow(p network.PipeIndex, s network.StructureIndex, level float64) bool {
 	before := w.atLeast[p]
 	w.atLeast[p] = w.now.network.Pipes[p].FullArea() * overSame
 	after, ok := w.try()
 	sinks := 1 / w.job.Settings.Units.InvertSteps
-	if !ok || !after.lines.Structures[s].Known || after.lines.Structures[s].Level > level-sinks {
+	reached := after.levelAt(s)
+	if !ok || !reached.OK || !(reached.V <= level-sinks && reached.V < level) {
 		w.atLeast[p] = before
 		return false
 	}
@@ -145,6 +147,14 @@ func (w *enlarger) grow(p network.PipeIndex, s network.StructureIndex, level flo
 	}
 	w.now = after
 	return true
+}
+
+// levelAt is the grade line at a structure; none where it is not known.
+func (a *attempt) levelAt(s network.StructureIndex) network.Maybe {
+	if a.lines == nil || !a.lines.Structures[s].Known {
+		return network.Maybe{}
+	}
+	return network.Some(a.lines.Structures[s].Level)
 }
 
 // overSame is beyond the room that counts two areas as the same.
