@@ -119,18 +119,7 @@ func (a *app) rain(names []string, f *rainFlags) error {
 	if err != nil {
 		return err
 	}
-	var files []outputFile
-	if f.out != "" {
-		var b bytes.Buffer
-		if err := s.WriteTable(&b); err != nil {
-			return err
-		}
-		files = append(files, outputFile{f.out, b.Bytes()})
-	}
-	if f.plot != "" {
-		files = append(files, outputFile{f.plot, drawing.RainCurves(s).Bytes()})
-	}
-	if err := a.writeFiles(files, f.force); err != nil {
+	if err := a.writeRain(s, f); err != nil {
 		return err
 	}
 	return a.write(func(w *bufio.Writer) error {
@@ -142,6 +131,22 @@ func (a *app) rain(names []string, f *rainFlags) error {
 		}
 		return text.Rain(w, s, f.format == "markdown")
 	})
+}
+
+// writeRain writes the files that --out and --plot ask for.
+func (a *app) writeRain(s *rain.Source, f *rainFlags) error {
+	var files []outputFile
+	if f.out != "" {
+		var b bytes.Buffer
+		if err := s.WriteTable(&b); err != nil {
+			return err
+		}
+		files = append(files, outputFile{f.out, b.Bytes()})
+	}
+	if f.plot != "" {
+		files = append(files, outputFile{f.plot, drawing.RainCurves(s).Bytes()})
+	}
+	return a.writeFiles(files, f.force)
 }
 
 // readContents reads the files named.
