@@ -30,16 +30,6 @@ func (a *Again) Up(flows *sweep.Flows, tailwater Tailwater) *Lines {
 	l.flows = flows
 	clear(l.Pipes)
 	clear(l.Structures)
-	for i := len(a.downstream) - 1; i >= 0; i-- {
-		s := a.downstream[i]
-		if l.network.Structures[s].Kind == network.Outfall {
-			l.receive(s, tailwater, &a.profile)
-			continue
-		}
-		l.stand(s)
-		for _, p := range l.network.PipesIn(s) {
-			l.draw(p, &a.profile)
-		}
-	}
+	l.pass(a.downstream, tailwater, &a.profile)
 	return l
 }

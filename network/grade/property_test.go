@@ -111,6 +111,29 @@ func TestLevelsRiseWithTheTailwaterWhereNothingIsLost(t *testing.T) {
 	})
 }
 
+// Where all is full and the pipes out control, a rise of the receiving water lifts every level above it by as much, whatever
+// the method.
+func TestLevelsRiseWithTheTailwaterWhereAllIsFull(t *testing.T) {
+	rapid.Check(t, func(t *rapid.T) {
+		d := randomDrain(t)
+		low, more := rapid.Float64Range(100, 200).Draw(t, "low"), rapid.Float64Range(0, 50).Draw(t, "more")
+		outfalls := func(level float64) {
+			for i := range d.Structures {
+				if d.Structures[i].Kind == network.Outfall {
+					d.Structures[i].Tailwater = network.Some(level)
+				}
+			}
+		}
+		outfalls(low)
+		before := d.lines()
+		outfalls(low + more)
+		after := d.lines()
+		for i := range before.Structures {
+			near(t, "rise of the level", after.Structures[i].Level-before.Structures[i].Level, more, 1e-9)
+		}
+	})
+}
+
 // Far above the crowns everything is full, and the levels are sums in closed form: friction, exits, bends and coefficients on
 // velocity heads.
 func TestDrownedNetworkIsASumOfPressureFlow(t *testing.T) {

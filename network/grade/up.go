@@ -15,19 +15,23 @@ func Up(n *network.Network, s Settings, flows *sweep.Flows, tailwater Tailwater)
 		network: n, flows: flows, settings: s,
 	}
 	order, _ := n.Order()
-	var profile surface.Profile // 7 kB, for one pipe after another
-	for i := len(order) - 1; i >= 0; i-- {
-		s := order[i]
-		if n.Structures[s].Kind == network.Outfall {
-			l.receive(s, tailwater, &profile)
+	l.pass(order, tailwater, new(surface.Profile)) // 7 kB, for one pipe after another
+	return l
+}
+
+// pass goes up a network whose structures are listed in the order of flow.
+func (l *Lines) pass(downstream []network.StructureIndex, tailwater Tailwater, profile *surface.Profile) {
+	for i := len(downstream) - 1; i >= 0; i-- {
+		s := downstream[i]
+		if l.network.Structures[s].Kind == network.Outfall {
+			l.receive(s, tailwater, profile)
 			continue
 		}
 		l.stand(s)
-		for _, p := range n.PipesIn(s) {
-			l.draw(p, &profile)
+		for _, p := range l.network.PipesIn(s) {
+			l.draw(p, profile)
 		}
 	}
-	return l
 }
 
 // receive draws the pipes into an outfall, and sets its level: the receiving water, or the water in the end of a pipe
