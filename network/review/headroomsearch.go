@@ -10,21 +10,25 @@ import (
 
 // How the search for an amount goes.
 const (
-	// amountTolerance is how near, relative, the largest amount that holds comes to the least that breaks: a fifth of
-	// the 0.1 % that is asked for.
-	amountTolerance = 2e-4
+	// amountTolerance is how near, relative, the largest amount that holds comes to the least that breaks: two fifths
+	// of the 0.1 % that is asked for.
+	amountTolerance = 4e-4
 	// least amounts are those under smallest of the first guess: they count as nothing.
 	smallest = 1e-9
 	// mostGrowth is how often an amount grows, up to fourfold, before it is taken that no limit ever
 	// breaks: 4^20 of the first guess.
 	mostGrowth = 20
-	// mostTrials bounds the closing of a bracket; halving alone takes 43 from the first guess down to smallest of it.
-	mostTrials = 90
+	// mostTrials bounds the closing of a bracket; halving every third time takes 3 · 30 from the first guess down to
+	// smallest of it.
+	mostTrials = 100
 )
 
 // insideParts are the parts of an answer at which it is looked whether levels hold there too: a level does not always
-// rise with the flow.
-var insideParts = []float64{0.3, 0.6, 0.9}
+// rise with the flow. A band of amounts that breaks a limit between them and is narrower than
+// insideStep of the answer may be missed.
+var insideParts = []float64{0.25, 0.5, 0.75}
+
+const insideStep = 0.25
 
 // trial is an amount that was tried.
 type trial struct {
@@ -133,15 +137,21 @@ func grow(low trial, x float64, probe func(float64) trial) (holds, breaks trial,
 	return low, trial{}, false
 }
 
-// closeIn brings the amounts that hold and that break together, by the rule of carriesSearch: a straight line between
-// both (Illinois), every third step a halving, and half the tolerance off the ends.
+// closeIn brings the amounts that hold and that break together: on a straight line between both, the end that stays
+// counting half (the Illinois rule, as in carriesSearch), and by halving where two such steps have not halved the
+// bracket, since room may jump. Steps keep half the tolerance off the ends.
 func closeIn(low, high trial, guess float64, probe func(float64) trial) (holds, breaks trial) {
 	roomLow, roomHigh, side := low.room, high.room, 0
-	for k := 1; k <= mostTrials && !closed(low, high, guess); k++ {
+	width, steps := high.amount-low.amount, 0
+	for k := 0; k < mostTrials && !closed(low, high, guess); k++ {
 		x := low.amount + roomLow/(roomLow-roomHigh)*(high.amount-low.amount)
-		if k%3 == 0 {
-			x = low.amount + (high.amount-low.amount)/2
+		if now := high.amount - low.amount; steps == 2 {
+			if now > width/2 {
+				x = low.amount + now/2
+			}
+			width, steps = now, 0
 		}
+		steps++
 		x = min(max(x, low.amount*(1+amountTolerance/2)), high.amount*(1-amountTolerance/2))
 		t := probe(x)
 		switch {
@@ -172,18 +182,12 @@ func closed(low, high trial, guess float64) bool {
 func (b *bench) inside(low, high trial, guess float64, run func(float64) (state, bool), probe func(float64) trial) (holds, breaks trial) {
 	start := trial{}
 	start.room, start.where, _ = b.least(nil)
-	for _, part := range insideParts {
-		t := probe(part * low.amount)
-		if t.failed || t.room < 0 {
-			return closeIn(start, t, guess, probe)
-		}
-		start = t
+	if holds, breaks, found := dip(start, low, probe); found {
+		return closeIn(holds, breaks, guess, probe)
 	}
 	if slices.Contains(b.options.Limits, Capacity) {
 		return low, high // no pipe that is under capacity has come over it
 	}
-	start = trial{}
-	start.room, start.where, _ = b.least(nil)
 	for _, p := range b.crossings(low.amount, run) {
 		filled, _ := b.filling(p, low.amount, guess, run)
 		if t := probe(filled); !t.failed && t.room < 0 {
@@ -193,12 +197,38 @@ func (b *bench) inside(low, high trial, guess float64, run func(float64) (state,
 	return low, high
 }
 
-// crossings are the pipes that run part full before an amount is added and over capacity with it.
+// dip looks between two amounts that hold for one that breaks: at some parts of the way, and where the room is less
+// than on a straight line, on both sides of the worst part too.
+func dip(start, low trial, probe func(float64) trial) (holds, breaks trial, found bool) {
+	tried := []trial{start}
+	look := func(x float64) bool {
+		breaks = probe(x)
+		if found = breaks.failed || breaks.room < 0; !found {
+			tried = append(tried, breaks)
+		}
+		return found
+	}
+	worst, under := 0.0, 0.0
+	for _, part := range insideParts {
+		if look(part * low.amount) {
+			return tried[len(tried)-1], breaks, true
+		}
+		if below := start.room + part*(low.room-start.room) - breaks.room; below > under {
+			worst, under = part, below
+		}
+	}
+	if under == 0 || look((worst-insideStep/2)*low.amount) || look((worst+insideStep/2)*low.amount) {
+		return start, breaks, found
+	}
+	return low, trial{}, false
+}
+
+// crossings are the pipes that are not over capacity before an amount is added and over capacity with it.
 func (b *bench) crossings(amount float64, run func(float64) (state, bool)) []network.PipeIndex {
 	var all []network.PipeIndex
 	r, _ := run(amount)
 	for _, p := range b.path {
-		if b.kept.Pipes[p].State == sweep.PartFull && r.flows.Pipes[p].State == sweep.Full {
+		if b.kept.Pipes[p].State != sweep.Full && b.kept.Pipes[p].HasCapacity && r.flows.Pipes[p].State == sweep.Full {
 			all = append(all, p)
 		}
 	}

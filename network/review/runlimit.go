@@ -48,17 +48,13 @@ func (r *state) capacityRoom(p network.PipeIndex) (room float64, ok bool) {
 }
 
 // crownRoom is the height of a crown over the grade line, at the upper end alone or at the worse of both ends;
-// negative where the line stands over it. There is none where the line is not known. In a dry pipe
-// nothing stands over a crown.
+// negative where the line stands over it, in a dry pipe too. There is none where the line is not known.
 func (r *state) crownRoom(p network.PipeIndex, bothEnds bool) (room float64, ok bool) {
 	pipe, line := &r.network.Pipes[p], &r.lines.Pipes[p]
 	if !line.Known {
 		return 0, false
 	}
 	rise := pipe.Section.Rise()
-	if line.Regime == grade.Dry {
-		return rise, true
-	}
 	room = pipe.InvertUpper.V + rise + finding.LevelRoom - line.HGLUpper
 	if bothEnds {
 		room = min(room, pipe.InvertLower.V+rise+finding.LevelRoom-line.HGLLower)
