@@ -116,14 +116,19 @@ var noticeRules = []ruleCase{
 		not: edits{pipeHeading, pipeHeading + ",status", p1, p1 + ",existing"},
 	},
 	{
+		rule: "assumed", subject: "P1",
+		found: edits{pipeHeading, pipeHeading + ",status", p1, p1 + ",existing"}, value: 0.013, limit: open,
+		not: edits{pipeHeading, pipeHeading + ",status,n", p1, p1 + ",existing,0.013"},
+	},
+	{
 		rule: "time-assumed", subject: "a1",
 		found: edits{a1, "a1,A,1,0.4,"}, value: 5, limit: open,
 		not: edits{a1, "a1,A,1,0,"}, // an area that sheds nothing sets no time
 	},
 	{
 		rule: "rim-unknown", subject: "B",
-		found: edits{"B,manhole,100,0,98", "B,manhole,100,0,"}, value: open, limit: open,
-		not: edits{"B,manhole,100,0,98", "B,blind-junction,100,0,"},
+		found: edits{"B,manhole,100,0,98", "B,blind-junction,100,0,"}, value: open, limit: open,
+		not: edits{"B,manhole,100,0,98", "B,blind-junction,100,0,98"},
 	},
 	{
 		rule: "levels-unknown", subject: "P2",

@@ -19,7 +19,7 @@ func (j *judge) timeAssumed() {
 func (j *judge) rimUnknown() {
 	for i := range j.Network.Structures {
 		s := &j.Network.Structures[i]
-		if !s.Rim.OK && s.Kind != network.Outfall && s.Kind != network.BlindJunction {
+		if !s.Rim.OK && s.Kind != network.Outfall {
 			j.add("rim-unknown", s.ID, network.Maybe{}, network.Maybe{}, "no rim: cover and freeboard are not judged here")
 		}
 	}

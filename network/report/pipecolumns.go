@@ -27,7 +27,7 @@ var PipeColumns = []Column[PipeRow]{
 	{"capacity_ratio", []string{"flow /", "capacity"}, Ratio, func(r *PipeRow) Value {
 		return Value{Number: r.Run.Flow / r.Run.Capacity, OK: r.Run.HasCapacity}
 	}},
-	{"depth", []string{"depth"}, Length, func(r *PipeRow) Value { return N(r.Run.Depth) }},
+	{"depth", []string{"normal", "depth"}, Length, func(r *PipeRow) Value { return N(r.Run.Depth) }},
 	{"depth_ratio", []string{"depth /", "rise"}, Ratio, func(r *PipeRow) Value { return N(r.Run.Depth / r.Pipe.Section.Rise()) }},
 	{"velocity", []string{"velocity,", "peak flow"}, Velocity, func(r *PipeRow) Value { return running(r, r.Run.Velocity) }},
 	{"velocity_full", []string{"velocity,", "flowing full"}, Velocity, func(r *PipeRow) Value { return M(r.VelocityFull) }},
@@ -57,7 +57,7 @@ var PipeGroups = []Group{
 
 // CheckGroups are the tables of the check storm: what it changes.
 var CheckGroups = []Group{
-	{"Pipes", []string{"id", "time", "intensity", "flow", "capacity", "capacity_ratio", "depth", "depth_ratio", "velocity", "regime", "hgl_upper", "hgl_lower"}},
+	{"Pipes", []string{"id", "time", "intensity", "flow", "capacity", "capacity_ratio", "depth", "depth_ratio", "velocity", "hgl_upper", "hgl_lower"}},
 }
 
 // Group is a table for people: a title and the keys of its columns.

@@ -21,6 +21,7 @@ func CompareJSON(w io.Writer, c *review.Comparison) error {
 	s.add(",\n\"worse\":")
 	s.add(word(c.Worse()))
 	s.texts("cautions", report.Cautions)
+	s.assumptions(c.After.Network)
 	s.add(",\n\"settings\":")
 	s.changes(c.Settings)
 	s.changed(c.Changed)

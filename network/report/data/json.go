@@ -20,6 +20,7 @@ func JSON(w io.Writer, r *analysis.Result, table string) error {
 	s.rainfall(r.Job)
 	s.criteria(r)
 	s.texts("cautions", report.Cautions)
+	s.assumptions(r.Network)
 	if table == "" || table == "pipes" {
 		writeArray(s, "pipes", pipes(r, &r.Design))
 	}

@@ -2,6 +2,7 @@ package page
 
 import (
 	_ "embed"
+	"fmt"
 	"html"
 	"html/template"
 	"io"
@@ -21,6 +22,7 @@ type sheets struct {
 	Title   string
 	Heading []string
 	Pages   []sheet
+	Assumed []string
 	Notes   []string
 }
 
@@ -60,6 +62,9 @@ func Explain(w io.Writer, r *analysis.Result, pages []review.Explanation) error 
 	s := sheets{
 		Heading: report.Heading(r),
 		Notes:   append([]string{"Each line holds by itself: its numbers, worked out with the digits that are printed, give its result to the last digit."}, report.Cautions...),
+	}
+	for _, a := range report.Assumptions(r.Network) {
+		s.Assumed = append(s.Assumed, fmt.Sprintf("Pipe %s, %s is not known: %.6g %s was taken, %s.", a.Pipe, a.What, a.Value, a.Unit, a.Because))
 	}
 	for i := range pages {
 		s.Pages = append(s.Pages, sheetOf(&pages[i]))

@@ -25,6 +25,7 @@ func Carries(w io.Writer, c *review.CarriesReport, o Options) error {
 	if o.Table == "" {
 		p.table("The weakest places from each head to its outfall", makeGrid(p.style, review.CarriesHeadColumns, c.HeadRows()))
 	}
+	p.assumptions("Assumptions: what is not known", c.Subject.Network)
 	p.cautions()
 	return p.err
 }

@@ -26,6 +26,8 @@ func Compare(w io.Writer, c *review.Comparison, markdown bool) error {
 	p.findingChanges(&c.Findings)
 	p.title("Conclusion")
 	p.bullet(conclusion(c))
+	p.assumptions("Assumptions before: what is not known", c.Before.Network)
+	p.assumptions("Assumptions after: what is not known", c.After.Network)
 	p.cautions()
 	return p.err
 }

@@ -20,6 +20,7 @@ func Explain(w io.Writer, r *analysis.Result, pages []review.Explanation, markdo
 			p.explainPart(&e.Parts[k])
 		}
 	}
+	p.assumptions("Assumptions of the job: what is not known", r.Network)
 	p.title("Notes")
 	p.bullet("Each line holds by itself: its numbers, worked out with the digits that are printed, give its result to the last digit.")
 	for _, c := range report.Cautions {

@@ -8,8 +8,8 @@ import (
 	"rimfall/network/report"
 )
 
-// findings prints them by rule, with the counts. In brief, a rule's findings for
-// another storm than the design storm are one list of their subjects.
+// findings prints them by rule, with the counts. In brief, what a rule found in
+// another storm than the design storm is one list of subjects, errors apart.
 func (p *printer) findings(found []finding.Finding, design float64, brief bool) {
 	if len(found) == 0 {
 		p.title("Findings: none")
@@ -37,7 +37,7 @@ func (p *printer) ofRule(found []finding.Finding, design float64, brief bool) {
 	var others []string // subjects in the check storm
 	for i := range found {
 		f := &found[i]
-		if brief && f.Storm != design && f.Accepted == "" {
+		if brief && f.Storm != design && !f.Breaks() && f.Accepted == "" {
 			others = append(others, f.Subject)
 			continue
 		}

@@ -22,6 +22,7 @@ func Headroom(w io.Writer, h *review.HeadroomReport, o Options) error {
 	if aside := h.SetAsideRows(); len(aside) > 0 {
 		p.table(fmt.Sprintf("Set aside: %d limits are broken already, and count no more", len(aside)), setAsideGrid(p.style, aside))
 	}
+	p.assumptions("Assumptions: what is not known", h.Subject.Network)
 	p.cautions()
 	return p.err
 }

@@ -38,6 +38,7 @@ func Run(w io.Writer, r *analysis.Result, o Options) error {
 	if o.Table == "" || o.Table == "findings" {
 		p.findings(r.Findings, r.Design.Storm.ReturnPeriod, o.Table == "")
 	}
+	p.assumptions("Assumptions: what is not known", r.Network)
 	p.cautions()
 	return p.err
 }

@@ -33,6 +33,7 @@ func Schedule(w io.Writer, r *analysis.Result, o Options) error {
 	if o.Table == "" || o.Table == "quantities" {
 		p.table("Quantities", makeGrid(p.style, report.QuantityColumns, report.Quantities(r)))
 	}
+	p.assumptions("Assumptions: what is not known", r.Network)
 	p.cautions()
 	return p.err
 }

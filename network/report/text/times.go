@@ -22,6 +22,7 @@ func Times(w io.Writer, r *analysis.Result, o Options) error {
 	if r.Check != nil {
 		p.timesOf(r, r.Check, o, fmt.Sprintf(", check storm of %g years", r.Check.Storm.ReturnPeriod))
 	}
+	p.assumptions("Assumptions: what is not known", r.Network)
 	p.cautions()
 	return p.err
 }
