@@ -89,6 +89,9 @@ type Pipe struct {
 	Existing bool
 	Share    Maybe // of the flow where a structure has several pipes out
 
+	// What was not given and was assumed in its place; Network.Assumptions says from what.
+	AssumedUpper, AssumedLower, AssumedN bool
+
 	Note string
 	Line int32
 }
@@ -125,6 +128,8 @@ type Network struct {
 	Areas      []Area
 	Ground     []GroundPoint // between structures, in the order of SortGround
 	Crossings  []Crossing
+
+	Assumptions []Assumption // what was not given, in the order of the pipes
 
 	out, in adjacency[PipeIndex]
 	here    adjacency[AreaIndex]

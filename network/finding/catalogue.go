@@ -254,6 +254,12 @@ var rules = []Rule{
 		Notice, "rainfall", common,
 	},
 	{
+		"assumed", "not known, and assumed",
+		"an invert of an existing pipe is not known and was taken from the straight line between known ones, or n was taken from the criteria",
+		"the results rest on it: a survey may find another value",
+		Notice, "pipes.csv invert_upper, invert_lower, n, material", common,
+	},
+	{
 		"time-assumed", "inlet time not given",
 		"the area has no inlet time; the minimum time was used",
 		"the shortest time gives the highest intensity, which is safe but may be wasteful",

@@ -56,7 +56,7 @@ func Judge(r Run) []Finding {
 		j.highVelocity, j.cover, j.coverAlongPipe, j.crossingClearance, j.minSize, j.sizeDecrease, j.invertOrder, j.leastFall, j.sizeChange,
 		j.lowestInvert, j.boundsCross, j.existingChosen, j.dropStructure, j.longPipe, j.outletVelocity,
 		j.drownedOutfall, j.fastBend, j.angleAssumed, j.jump, j.lowTailwater, j.lineUnknown, j.flowFalls, j.rationalArea,
-		j.belowFirstDuration, j.pathLimit, j.pathBelowFirst, j.pathUnused, j.stormBetween, j.rainfallConverted, j.rainfallRemark, j.timeAssumed, j.rimUnknown, j.levelsUnknown, j.wallUnknown, j.noFlow, j.unusedOutfall,
+		j.belowFirstDuration, j.pathLimit, j.pathBelowFirst, j.pathUnused, j.stormBetween, j.rainfallConverted, j.rainfallRemark, j.assumed, j.timeAssumed, j.rimUnknown, j.levelsUnknown, j.wallUnknown, j.noFlow, j.unusedOutfall,
 	} {
 		rule()
 	}

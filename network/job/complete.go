@@ -76,13 +76,29 @@ func (t *table) filled(record []string, p *network.Pipe) []string {
 	for _, f := range chosenFields {
 		i, has := t.column[f]
 		switch {
+		case has && assumed(f, p): // it is taken again from the same known levels
+		case !has && assumed(f, p):
+			record = append(record, "")
 		case !has:
 			record = append(record, t.chosen(f, p))
-		case strings.TrimSpace(record[i]) == "":
+		case strings.TrimSpace(t.unlessUnknown(f, record[i])) == "":
 			record[i] = t.chosen(f, p)
 		}
 	}
 	return record
+}
+
+// assumed tells whether a field of a pipe rests on an assumption, and was not chosen.
+func assumed(field string, p *network.Pipe) bool {
+	switch field {
+	case "invert_upper":
+		return p.AssumedUpper
+	case "invert_lower":
+		return p.AssumedLower
+	case "slope":
+		return (p.AssumedUpper || p.AssumedLower) && !p.GivenSlope
+	}
+	return false
 }
 
 // chosen is a number of a pipe as it is written: in the shortest form that reads

@@ -113,7 +113,7 @@ func (r *reader) open(name string, required ...string) (*table, bool) {
 	if !ok {
 		return t, false
 	}
-	t.sizeUnit = r.settings.Units.Size
+	t.sizeUnit, t.unknown = r.settings.Units.Size, r.settings.Unknown
 	r.tables[name] = t
 	for _, field := range slices.Sorted(maps.Keys(t.renames)) {
 		if !t.has(field) {

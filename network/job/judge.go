@@ -21,6 +21,8 @@ func (r *reader) judgeNetwork(j *Job, purpose Purpose) {
 	if r.tables["structures"].broken || r.tables["pipes"].broken {
 		return // rows are missing, so what the others are joined to is not known
 	}
+	r.assume()
+	r.judgeSlopes(j)
 	told := r.places()
 	for _, p := range n.Validate() {
 		if p.Table == "structures" && p.Line > 0 && !whole {

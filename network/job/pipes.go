@@ -131,9 +131,9 @@ func (r *reader) levels(t *table, row *pipeRow, p *network.Pipe) {
 // judgeSlope: a pipe that is checked needs a slope; one that is to be sized, a
 // fall where it has a slope.
 func (r *reader) judgeSlope(t *table, row *pipeRow, p *network.Pipe) {
-	blankSize := strings.TrimSpace(row.Size) == ""
+	blankSize := strings.TrimSpace(t.unlessUnknown("size", row.Size)) == ""
 	switch {
-	case r.purpose == ToCheck && !p.Slope.OK:
+	case r.purpose == ToCheck && !p.Slope.OK && !p.Existing: // of existing pipes see judgeSlopes
 		t.faultAt("slope", "pipe %s has no slope: write the slope or both inverts, or let `rimfall size` choose them", p.ID)
 	case r.purpose == ToSize && blankSize && p.Slope.OK && p.Slope.V <= 0:
 		t.faultAt("slope", "pipe %s is to be sized on a slope of %.6g; a size can be chosen only where the pipe falls to its lower end", p.ID, p.Slope.V)
@@ -143,8 +143,9 @@ func (r *reader) judgeSlope(t *table, row *pipeRow, p *network.Pipe) {
 // materialAndN reads the material and Manning's n: as given, else the
 // material's, else the criterion.
 func (r *reader) materialAndN(t *table, row *pipeRow, p *network.Pipe) {
-	p.N = r.settings.Criteria.N
-	if name := strings.ToLower(strings.TrimSpace(row.Material)); name != "" {
+	p.N, p.AssumedN = r.settings.Criteria.N, p.Existing
+	if name := strings.ToLower(strings.TrimSpace(row.Material)); name != "" && name != unknownMaterial {
+		p.AssumedN = false
 		m, ok := catalog.MaterialByName(name)
 		if ok {
 			p.Material, p.N = m.Name, m.N
@@ -156,6 +157,6 @@ func (r *reader) materialAndN(t *table, row *pipeRow, p *network.Pipe) {
 		}
 	}
 	if v := t.number("n", row.N, positive); v.OK {
-		p.N = v.V
+		p.N, p.AssumedN = v.V, false
 	}
 }

@@ -30,6 +30,7 @@ var (
 		criteriaSection,
 		{name: "grade", words: gradeWords},
 		{name: "output", words: outputWords},
+		{name: "unknown", texts: []string{"values"}},
 	}
 )
 
@@ -57,6 +58,7 @@ func (r *reader) readSettings(d document) Settings {
 	r.applyCriteriaSet(d, &s)
 	r.applySections(d, &s)
 	r.applyFiles(d, &s)
+	r.readUnknown(d, &s)
 	r.readEquations(d, &s)
 	if file := r.text(d, "storm.rainfall"); file != "" {
 		s.Rainfall = file
@@ -130,7 +132,7 @@ func (r *reader) applySections(d document, s *Settings) {
 		}
 		i := slices.IndexFunc(jobSections, func(sec section) bool { return sec.name == table })
 		if i < 0 {
-			d.fault(&r.faults, key, "unknown table [%s]: %s", table, fault.Suggest(table, []string{"storm", "criteria", "grade", "output", "files", "columns"}))
+			d.fault(&r.faults, key, "unknown table [%s]: %s", table, fault.Suggest(table, []string{"storm", "criteria", "grade", "output", "unknown", "files", "columns"}))
 			continue
 		}
 		r.apply(d, key, name, jobSections[i], s)

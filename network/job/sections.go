@@ -23,7 +23,7 @@ func (r *reader) sizeAndWall(t *table, row *pipeRow, p *network.Pipe) {
 	if wall.OK {
 		p.Wall, p.HasWall = wall.V/r.settings.Units.SizeFactor, true
 	}
-	text := strings.TrimSpace(row.Size)
+	text := strings.TrimSpace(t.unlessUnknown("size", row.Size))
 	if text == "" {
 		r.judgeBlankSize(t, row, p)
 		return

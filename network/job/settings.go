@@ -16,6 +16,8 @@ type Settings struct {
 	Rain     RainSettings
 	FlowUnit string // in tables and drawings: "cfs", "m3/s" or "L/s"
 
+	Unknown []float64 // numbers that stand for "not known" in a survey
+
 	Files   map[string]string            // table → file name
 	Columns map[string]map[string]string // table → field → heading
 }

@@ -66,6 +66,7 @@ type table struct {
 
 	renames      map[string]string // field → the user's heading
 	sizeUnit     string            // of sizes that are written
+	unknown      []float64         // numbers that stand for "not known"
 	decimalComma bool              // numbers are written with a comma
 }
 

@@ -27,6 +27,7 @@ func (t *table) number(field, text string, s sign) network.Maybe {
 	switch {
 	case !ok:
 		t.faultAt(field, "%s: %q is no number: %s", field, text, whyNoNumber(text, t.comma))
+	case t.isUnknown(field, v):
 	case s == positive && v <= 0:
 		t.faultAt(field, "%s = %s: it must be over 0", field, text)
 	case s == positive && v < smallest:

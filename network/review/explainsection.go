@@ -12,13 +12,13 @@ func (s *sheet) pipeGiven(p network.PipeIndex) {
 	s.part("Given")
 	s.given("L", "length", pipe.Length, u.Length, "pipes, else coordinates")
 	if pipe.InvertUpper.OK {
-		s.given("z_u", "invert, upper end", pipe.InvertUpper.V, u.Length, orChosen(was.InvertUpper.OK))
+		s.given("z_u", "invert, upper end", pipe.InvertUpper.V, u.Length, levelSource(pipe.AssumedUpper, was.InvertUpper.OK))
 	}
 	if pipe.InvertLower.OK {
-		s.given("z_l", "invert, lower end", pipe.InvertLower.V, u.Length, orChosen(was.InvertLower.OK))
+		s.given("z_l", "invert, lower end", pipe.InvertLower.V, u.Length, levelSource(pipe.AssumedLower, was.InvertLower.OK))
 	}
 	s.slope(pipe, orChosen(was.Slope.OK))
-	s.given("n", "roughness"+ofMaterial(pipe), pipe.N, "", "pipes, else the material's")
+	s.given("n", "roughness"+ofMaterial(pipe), pipe.N, "", nSource(pipe))
 	s.given("k", "Manning's unit constant", s.storm.ManningFactor, "", "manning_factor")
 	s.given("g", "gravity", u.Gravity, u.Length+"/s²", standardGravity)
 	s.given("N", "barrels", float64(pipe.Count), "", "pipes")
@@ -33,6 +33,21 @@ func orChosen(given bool) string {
 		return "pipes"
 	}
 	return "chosen"
+}
+
+// levelSource is where an invert stands, or that it is not known.
+func levelSource(assumed, given bool) string {
+	if assumed {
+		return "assumed, see the list of assumptions"
+	}
+	return orChosen(given)
+}
+
+func nSource(pipe *network.Pipe) string {
+	if pipe.AssumedN {
+		return "assumed: n of the criteria"
+	}
+	return "pipes, else the material's, else the criteria's"
 }
 
 // size is the size as it is written and in the unit of lengths.
