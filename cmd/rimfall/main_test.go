@@ -22,7 +22,8 @@ func TestSessions(t *testing.T) {
 		t.Fatal(err)
 	}
 	testscript.Run(t, testscript.Params{
-		Dir: "testdata/script",
+		Dir:           "testdata/script",
+		UpdateScripts: *updateReadme, // with the flag of the README's test: look at what changed
 		Setup: func(e *testscript.Env) error {
 			e.Setenv("EXAMPLES", root+"/../../examples")
 			e.Setenv("TESTDATA", root+"/../../testdata")
