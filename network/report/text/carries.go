@@ -11,11 +11,11 @@ import (
 // Carries prints what a network carries. table narrows it to "pipes" or "structures".
 func Carries(w io.Writer, c *review.CarriesReport, o Options) error {
 	p := reviewPrinter(w, c.Subject, o)
-	p.heading([]string{
+	p.heading(append([]string{
 		c.Subject.Job.Settings.Title,
-		fmt.Sprintf("Largest storm that still holds, of %g to %g years; rainfall %s", c.Smallest, c.Largest, c.Subject.Job.Settings.Rainfall),
-		fmt.Sprintf("%d storms were run, at intensities between the columns; tailwaters and steady inflows as given", c.Runs),
-	})
+		fmt.Sprintf("Largest storm that still holds, of %s; rainfall %s", rangeOfPeriods(c.Smallest, c.Largest), c.Subject.Source()),
+		fmt.Sprintf("Storms run: %d, with intensities between the columns; tailwaters and steady inflows as given", c.Runs),
+	}, c.Subject.Grounds()...))
 	if o.Table == "" || o.Table == "pipes" {
 		p.table("Pipes: the storm up to which capacity and crown hold", makeGrid(p.style, review.CarriesPipeColumns, c.PipeRows()))
 	}
@@ -28,6 +28,13 @@ func Carries(w io.Writer, c *review.CarriesReport, o Options) error {
 	p.assumptions("Assumptions: what is not known", c.Subject.Network)
 	p.cautions()
 	return p.err
+}
+
+func rangeOfPeriods(smallest, largest float64) string {
+	if smallest == largest {
+		return fmt.Sprintf("%g years, the only one", largest)
+	}
+	return fmt.Sprintf("%g to %g years", smallest, largest)
 }
 
 // reviewPrinter is a printer in the style of a job.

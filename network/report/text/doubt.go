@@ -11,8 +11,8 @@ import (
 func Doubt(w io.Writer, d *review.DoubtReport, o Options) error {
 	p := reviewPrinter(w, d.Subject, o)
 	set := &d.Subject.Job.Settings
-	lines := []string{set.Title, fmt.Sprintf("Doubt about the storm of %g years, rainfall %s", d.Subject.Storm.ReturnPeriod, set.Rainfall)}
-	p.heading(append(lines, d.Statement()...))
+	lines := []string{set.Title, fmt.Sprintf("Doubt about the storm of %g years, rainfall %s", d.Subject.Storm.ReturnPeriod, d.Subject.Source())}
+	p.heading(append(append(lines, d.Statement()...), d.Subject.Grounds()...))
 	if o.Table == "" || o.Table == "pipes" {
 		p.table("Pipes: chances and quantiles", makeGrid(p.style, review.DoubtPipeColumns, d.PipeRows()))
 	}

@@ -12,12 +12,12 @@ import (
 func Headroom(w io.Writer, h *review.HeadroomReport, o Options) error {
 	p := reviewPrinter(w, h.Subject, o)
 	set := &h.Subject.Job.Settings
-	p.heading([]string{
+	p.heading(append([]string{
 		set.Title,
-		fmt.Sprintf("Headroom in the storm of %g years, rainfall %s; limits: %s", h.Subject.Storm.ReturnPeriod, set.Rainfall, h.Words()),
+		fmt.Sprintf("Headroom in the storm of %g years, rainfall %s; limits: %s", h.Subject.Storm.ReturnPeriod, h.Subject.Source(), h.Words()),
 		fmt.Sprintf("An area of C %g and %g min, or a steady flow in its place, until the first limit breaks anywhere in the system", h.Options.C, h.Options.Time),
 		"Peaks by partial area, whatever the job says: the larger of the longest time and any shorter one. Rounded down",
-	})
+	}, h.Subject.Grounds()...))
 	p.table("Headroom at the structures", makeGrid(p.style, review.HeadroomColumns, h.Rows()))
 	if aside := h.SetAsideRows(); len(aside) > 0 {
 		p.table(fmt.Sprintf("Set aside: %d limits are broken already, and count no more", len(aside)), setAsideGrid(p.style, aside))
