@@ -3,6 +3,7 @@ package sweep_test
 import (
 	"fmt"
 	"math"
+	"sync"
 	"testing"
 
 	"pgregory.net/rapid"
@@ -212,9 +213,10 @@ func BenchmarkPartialSweep(b *testing.B) {
 	rain := longRain(b)
 	for _, shape := range networktest.Shapes {
 		for _, pipes := range []int{1e3, 1e4, 1e5, 1e6} {
-			n := networktest.New(shape, pipes)
+			made := sync.OnceValue(func() *network.Network { return networktest.New(shape, pipes) })
 			for k, storm := range []network.Storm{usStorm(), partialStorm()} {
 				b.Run(fmt.Sprintf("%s/%.0e/%s", shape, float64(pipes), network.Peaks[k]), func(b *testing.B) {
+					n := made()
 					for b.Loop() {
 						if _, problems := sweep.Down(n, &storm, rain, nil); len(problems) > 0 {
 							b.Fatal(problems[0].Text)
