@@ -78,7 +78,8 @@ func TestRainfallIsExplainedInEveryForm(t *testing.T) {
 		{"a column of a table", []string{table, "duration,10\n5,6\n60,2\n"}, "i_1 × (t/t_1)^m"},
 		{"a period between two columns", []string{table, "duration,5,25\n5,6,8\n60,2,3\n"}, "i_1 × (t/t_1)^m"},
 		{
-			"the same with uplift, annual maxima", []string{table, "duration,5,25\n5,6,8\n60,2,3\n", "return_period = 10\n", "return_period = 10\nuplift = 1.2\nseries = \"annual-maximum\"\n"},
+			"the same with uplift, annual maxima",
+			[]string{table, "duration,5,25\n5,6,8\n60,2,3\n", "return_period = 10\n", "return_period = 10\nuplift = 1.2\nseries = \"annual-maximum\"\n"},
 			"i_1 × (t/t_1)^m",
 		},
 		{"an equation of one term", []string{"return_period = 10\n", "return_period = 10\n[storm.equation]\nform = \"sherman\"\nnumerator = 60\nshift = 10\nexponent = 0.85\n"}, "a_1/(t + d_1)^e_1"},
