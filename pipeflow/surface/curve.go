@@ -52,11 +52,11 @@ func (c *curve) lay(w *water, p path, sign, distance float64) {
 	}
 }
 
-// firstWidth is the width of the first panel, at most 1: what the distance takes by the speed near the control. At
+// firstWidth is the width of the first panel, at most 1.5: what the distance takes by the speed near the control. At
 // critical depth the speed is 0 and grows evenly, elsewhere it hardly changes.
 func (w *water) firstWidth(p *path, sign, distance float64) float64 {
 	const near = 0.02
-	widest := min(1, p.end)
+	widest := min(1.5, p.end)
 	probe := near * widest
 	if probe == 0 {
 		return 0

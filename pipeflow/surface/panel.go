@@ -73,7 +73,7 @@ func (m *panel) roughness() float64 {
 
 // smooth is the roughness that is let pass. The error of the distance is far below it: the tests measure it against a
 // fine solution.
-const smooth = 2e-2
+const smooth = 1e-2
 
 // fitting is the factor to the width at which the roughness would come to smooth, by the fifth power that the first
 // term dropped goes with; a tenth less for safety, and within limits.
