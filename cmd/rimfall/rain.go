@@ -14,6 +14,7 @@ import (
 	"rimfall/hydrology"
 	"rimfall/hydrology/fit"
 	"rimfall/hydrology/rainfile"
+	"rimfall/network/analysis"
 	"rimfall/network/job"
 	"rimfall/network/rain"
 	"rimfall/network/report/data"
@@ -39,14 +40,15 @@ var (
 func (a *app) rainCommand() *cobra.Command {
 	var f rainFlags
 	cmd := &cobra.Command{
-		Use:   "rain FILE...",
+		Use:   "rain FILE... | JOB",
 		Short: "Show a rainfall file: its table, the equations that fit it, its curves",
 		Long: `rain reads a rainfall file, recognised by its content, and prints its table of intensities:
   a point file of NOAA Atlas 14, as the server sends it or as a spreadsheet saved it;
   a short-duration text of Environment and Climate Change Canada;
   a table of one's own, headed duration (min) and return periods (years);
   a list of annual maxima, headed year and durations (min), depths in inches or mm.
-An estimate and its bounds in files of their own are named together.
+An estimate and its bounds in files of their own are named together. Of a job folder the rainfall
+of the job is shown, in its unit and before uplift; an equation at the usual durations.
 
 --fit fits the usual equations to the table by least squares, with the error of each at each
 duration; of annual maxima it fits four distributions, with confidence limits and goodness of fit.
@@ -105,17 +107,7 @@ func (a *app) rain(names []string, f *rainFlags) error {
 	if err != nil {
 		return err
 	}
-	if len(names) == 0 {
-		return usageError{"name a rainfall file; see `rimfall rain --help`"}
-	}
-	contents, err := readContents(names)
-	if err != nil {
-		return err
-	}
-	if o.Unit == "" {
-		o.Unit = unitBeside(names[0])
-	}
-	s, err := rain.Read(contents, o)
+	s, err := a.readRain(names, o)
 	if err != nil {
 		return err
 	}
@@ -131,6 +123,42 @@ func (a *app) rain(names []string, f *rainFlags) error {
 		}
 		return text.Rain(w, s, f.format == "markdown")
 	})
+}
+
+// readRain reads the files named, or the rainfall of the job whose folder is named.
+func (a *app) readRain(names []string, o rain.Options) (*rain.Source, error) {
+	if len(names) == 0 {
+		return nil, usageError{"name a rainfall file, or a job folder; see `rimfall rain --help`"}
+	}
+	if info, err := os.Stat(names[0]); len(names) == 1 && err == nil && info.IsDir() {
+		return rainOfJob(names[0], o)
+	}
+	contents, err := readContents(names)
+	if err != nil {
+		return nil, err
+	}
+	if o.Unit == "" {
+		o.Unit = unitBeside(names[0])
+	}
+	return rain.Read(contents, o)
+}
+
+// rainOfJob is the rainfall that a job runs on, before uplift: its table, or its equation at the usual durations.
+func rainOfJob(dir string, o rain.Options) (*rain.Source, error) {
+	j, err := analysis.Read(dir, analysis.Options{Size: true})
+	if err != nil {
+		return nil, err
+	}
+	table, err := j.RainTable()
+	if err != nil {
+		return nil, err
+	}
+	unit := hydrology.IntensityUnit(j.Settings.Units.Intensity)
+	described := j.Rain.Describe()
+	if described == "" {
+		described = fmt.Sprintf("%s · %s series · %s", j.Rain.File, j.Rain.Series, unit)
+	}
+	return rain.OfTable(table, unit, j.Rain.Series, j.Rain.Place, described, o), nil
 }
 
 // writeRain writes the files that --out and --plot ask for.

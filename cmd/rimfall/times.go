@@ -8,6 +8,7 @@ import (
 
 	"github.com/spf13/cobra"
 
+	"rimfall/hydrology"
 	"rimfall/network/analysis"
 	"rimfall/network/report/data"
 	"rimfall/network/report/text"
@@ -23,7 +24,14 @@ func (a *app) timesCommand() *cobra.Command {
 		Short: "Show every inlet time step by step, and which branch sets each structure's time",
 		Long: `times prints the flow path of every area step by step, with the formula, the numbers and
 the result, and how sheet flow settles on the storm's intensity; then for every structure the
-longest time and the area, pipe or minimum that sets it, with the area at the head of that branch.`,
+longest time and the area, pipe or minimum that sets it, with the area at the head of that branch.
+
+A flow path stands in paths.csv, a leg a row: area, order (1, 2, 3 … from the far end down), kind,
+length, slope, surface or n, section. The kinds are:
+` + legKinds() + `
+The section of a pipe is its diameter, of a gutter "cross 0.02 spread 6", of a channel "radius 0.95",
+"area 27 perimeter 28.2" or "bottom 4 depth 1.5 side 2". A surface gives n for sheet flow (by its name in
+surfaces.csv or in a published list) and the cover for shallow flow.`,
 		Example: "  rimfall times examples/orchard-rise --size\n  rimfall times JOB --storm 100\n  rimfall times JOB --table structures --format markdown",
 		Args:    oneJob,
 		RunE: func(cmd *cobra.Command, args []string) error {
@@ -59,4 +67,13 @@ longest time and the area, pipe or minimum that sets it, with the area at the he
 	complete(cmd, "format", formats)
 	complete(cmd, "table", text.TimesTables)
 	return cmd
+}
+
+// legKinds lists the kinds of legs with what each is.
+func legKinds() string {
+	var b strings.Builder
+	for _, m := range hydrology.Methods() {
+		fmt.Fprintf(&b, "  %-17s %s\n", m.Kind, m.Title)
+	}
+	return b.String()
 }

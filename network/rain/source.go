@@ -40,6 +40,18 @@ type Source struct {
 
 	Equations     []Equation
 	Distributions []Distribution
+
+	described string // of a table that is of no file of its own
+}
+
+// OfTable shows a table of intensities in a unit, with where it is from in words.
+func OfTable(t hydrology.Table, unit hydrology.IntensityUnit, series hydrology.Series, place, described string, o Options) *Source {
+	s := &Source{Table: t, described: described}
+	s.Unit, s.Series, s.Place.Name = unit, series, place
+	if o.Fit {
+		s.fitEquations()
+	}
+	return s
 }
 
 // Read reads one file, or an estimate and its bounds sent as files of their own.

@@ -55,6 +55,9 @@ func (s *Source) comments() []string {
 
 // Describe says in one line what the table is and where it is from.
 func (s *Source) Describe() string {
+	if s.described != "" {
+		return s.described
+	}
 	var parts []string
 	for _, p := range []string{s.Place.String(), s.Kind.String(), s.Edition} {
 		if p != "" {

@@ -3,6 +3,7 @@ package data
 import (
 	"io"
 
+	"rimfall/hydrology/rainfile"
 	"rimfall/network/rain"
 )
 
@@ -28,7 +29,9 @@ func RainJSON(w io.Writer, r *rain.Source) error {
 	text("place", r.Place.String())
 	text("latitude", r.Place.Latitude)
 	text("longitude", r.Place.Longitude)
-	text("kind", r.Kind.String())
+	if r.Kind != rainfile.Unknown {
+		text("kind", r.Kind.String())
+	}
 	text("edition", r.Edition)
 	text("series", rain.SeriesWord(r.Series))
 	text("unit", string(r.Unit))

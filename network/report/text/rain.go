@@ -15,8 +15,11 @@ func Rain(w io.Writer, s *rain.Source, markdown bool) error {
 	p := &printer{w: w, markdown: markdown}
 	p.heading([]string{"Rainfall", s.Describe()})
 	p.table("Intensity, "+string(s.Unit)+", by duration and return period", rainGrid(s))
+	if len(s.Notices) > 0 {
+		p.title("Remarks on the file")
+	}
 	for _, n := range s.Notices {
-		p.line("line %d: %s", n.Line, n.Text)
+		p.bullet(fmt.Sprintf("line %d: %s", n.Line, n.Text))
 	}
 	if len(s.Equations) > 0 {
 		p.equations(s)
