@@ -99,8 +99,8 @@ func (c *Comparison) pipes() {
 		return &row
 	}
 	pairs := c.pair(OfPipe, ids(c.Before.Network.Pipes, pipeID), ids(c.After.Network.Pipes, pipeID))
-	columns := append(slices.Clone(pipeGiven), wallOf(c.After.Job.Settings.Units))
-	results := report.Pick(report.PipeColumns, pipeResults)
+	columns := namedColumns(append(slices.Clone(pipeGiven), wallOf(c.After.Job.Settings.Units)))
+	results := namedColumns(report.Pick(report.PipeColumns, pipeResults))
 	for _, e := range pairs {
 		b, a := &c.Before.Network.Pipes[e.Before], &c.After.Network.Pipes[e.After]
 		given := append(c.ends(b, a), differences(columns, b, a)...)
@@ -114,19 +114,21 @@ func (c *Comparison) structures() {
 		return &row
 	}
 	pairs := c.pair(OfStructure, ids(c.Before.Network.Structures, structureID), ids(c.After.Network.Structures, structureID))
-	results := report.Pick(report.StructureColumns, structureResults)
+	columns := namedColumns(structureGiven)
+	results := namedColumns(report.Pick(report.StructureColumns, structureResults))
 	for _, e := range pairs {
 		b, a := &c.Before.Network.Structures[e.Before], &c.After.Network.Structures[e.After]
-		c.note(Changed{e, differences(structureGiven, b, a), differences(results, row(c.Before, e.Before), row(c.After, e.After))})
+		c.note(Changed{e, differences(columns, b, a), differences(results, row(c.Before, e.Before), row(c.After, e.After))})
 	}
 }
 
 func (c *Comparison) areas() {
 	pairs := c.pair(OfArea, ids(c.Before.Network.Areas, areaID), ids(c.After.Network.Areas, areaID))
+	columns := namedColumns(areaGiven)
 	for _, e := range pairs {
 		b, a := &c.Before.Network.Areas[e.Before], &c.After.Network.Areas[e.After]
 		drains := between("structure", "drains to", structureName(c.Before, b.Structure), structureName(c.After, a.Structure))
-		c.note(Changed{e, append(drains, differences(areaGiven, b, a)...), nil})
+		c.note(Changed{e, append(drains, differences(columns, b, a)...), nil})
 	}
 }
 
@@ -195,17 +197,39 @@ func structureName(r *analysis.Result, s network.StructureIndex) string {
 	return r.Network.Structures[s].ID
 }
 
-// differences are the columns in which two rows differ.
-func differences[R any](columns []report.Column[R], before, after *R) []Change {
-	var all []Change
+// named is a column with its heading in one line.
+type named[R any] struct {
+	*report.Column[R]
+	name string
+}
+
+func namedColumns[R any](columns []report.Column[R]) []named[R] {
+	all := make([]named[R], len(columns))
 	for i := range columns {
-		c := &columns[i]
-		if b, a := c.Value(before), c.Value(after); !same(b, a) {
-			all = append(all, Change{c.Key, strings.Join(c.Head, " "), c.Quantity, b, a})
-		}
+		all[i] = named[R]{&columns[i], strings.Join(columns[i].Head, " ")}
 	}
 	return all
 }
+
+// differences are the columns in which two rows differ. They are gathered aside first, so
+// that what is kept of a large job has no room to spare.
+func differences[R any](columns []named[R], before, after *R) []Change {
+	var room [mostColumns]Change
+	all := room[:0]
+	for i := range columns {
+		c := &columns[i]
+		if b, a := c.Value(before), c.Value(after); !same(b, a) {
+			all = append(all, Change{c.Key, c.name, c.Quantity, b, a})
+		}
+	}
+	if len(all) == 0 {
+		return nil
+	}
+	return append(make([]Change, 0, len(all)), all...)
+}
+
+// mostColumns is at least the number of columns of any list here.
+const mostColumns = 48
 
 // sameNumber is the share by which two results may differ and be one: rows in another
 // order add up to other last digits, some 1e-15, which levels and iterations multiply.

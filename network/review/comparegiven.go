@@ -77,7 +77,7 @@ var areaGiven = []report.Column[network.Area]{
 func (c *Comparison) settings() {
 	b, a := c.Before.Job.Settings, c.After.Job.Settings
 	b.Storm.ReturnPeriod, a.Storm.ReturnPeriod = c.Before.Design.Storm.ReturnPeriod, c.After.Design.Storm.ReturnPeriod
-	c.Settings = differences(settingColumns, &b, &a)
+	c.Settings = differences(namedColumns(settingColumns), &b, &a)
 	if !c.sameRain() {
 		c.Settings = append(c.Settings, Change{"intensities", "intensities of the design storm", report.Text, report.T("as given"), report.T("others")})
 	}
