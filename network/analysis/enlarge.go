@@ -1,6 +1,9 @@
 package analysis
 
 import (
+	"cmp"
+	"slices"
+
 	"rimfall/hydrology"
 	"rimfall/network"
 	"rimfall/network/finding"
@@ -82,9 +85,9 @@ func (w *enlarger) work() (ok bool) {
 	for i := range w.grewFor {
 		w.grewFor[i] = -1
 	}
-	order, _ := w.system.network.Order()
+	fromBelow := upstreamOrder(w.system.network)
 	for {
-		s, broken := w.governing(order)
+		s, broken := w.governing(fromBelow)
 		if !broken {
 			return true
 		}
@@ -96,13 +99,29 @@ func (w *enlarger) work() (ok bool) {
 
 // governing is the structure farthest downstream whose freeboard is broken and may yet be cured: its level drives those
 // above it.
-func (w *enlarger) governing(order []network.StructureIndex) (s network.StructureIndex, broken bool) {
-	for i := len(order) - 1; i >= 0; i-- {
-		if s := order[i]; !w.stuck[s] && w.breaks(s) {
+func (w *enlarger) governing(fromBelow []network.StructureIndex) (s network.StructureIndex, broken bool) {
+	for _, s := range fromBelow {
+		if !w.stuck[s] && w.breaks(s) {
 			return s, true
 		}
 	}
 	return 0, false
+}
+
+// upstreamOrder lists all structures from the outfalls up: by the number of pipes on the longest way down, then by id, so
+// that the order of the rows changes no result.
+func upstreamOrder(n *network.Network) []network.StructureIndex {
+	order, _ := n.Order()
+	steps := make([]int, len(n.Structures))
+	for _, s := range slices.Backward(order) {
+		for _, p := range n.PipesOut(s) {
+			steps[s] = max(steps[s], 1+steps[n.Pipes[p].To])
+		}
+	}
+	slices.SortFunc(order, func(a, b network.StructureIndex) int {
+		return cmp.Or(cmp.Compare(steps[a], steps[b]), cmp.Compare(n.Structures[a].ID, n.Structures[b].ID))
+	})
+	return order
 }
 
 // breaks tells whether the freeboard is broken at a structure.
