@@ -44,6 +44,7 @@ func (s *sink) asked(of *review.Subject) {
 	s.add(",\n\"units\":")
 	s.b = appendString(s.b, set.Units.Name)
 	s.texts("cautions", report.Cautions)
+	s.assumptions(of.Network)
 }
 
 // number adds a number to an open object.

@@ -1,6 +1,8 @@
 package drawing
 
 import (
+	"slices"
+
 	"rimfall/network/report"
 	"rimfall/network/units"
 )
@@ -113,7 +115,7 @@ func (s *sheet) words(x, y, size float64, text string) {
 
 // titled draws the strip's notes and title. What every report says stands on every sheet.
 func (s *sheet) titled(r *run, h heading) {
-	s.notes(append(h.notes, report.Cautions...))
+	s.notes(slices.Concat(assumedNote(r.Network), h.notes, report.Cautions))
 	box := s.titleBox()
 	s.Line(Point{box.Left, box.Top}, Point{box.Left, box.Bottom}, medium)
 	lines := report.Heading(r.Result)

@@ -19,6 +19,7 @@ func Doubt(w io.Writer, d *review.DoubtReport, o Options) error {
 	if o.Table == "" || o.Table == "structures" {
 		p.table("Structures: chances and quantiles", makeGrid(p.style, review.DoubtStructureColumns, d.StructureRows()))
 	}
+	p.assumptions("Assumptions: what is not known", d.Subject.Network)
 	p.cautions()
 	return p.err
 }
