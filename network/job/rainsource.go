@@ -10,6 +10,7 @@ import (
 
 	"rimfall/hydrology"
 	"rimfall/hydrology/rainfile"
+	"rimfall/network/fault"
 )
 
 // Rain is the rainfall of a job: a table of intensities in the job's unit, or
@@ -77,10 +78,11 @@ func (r *reader) jobIntensity() hydrology.IntensityUnit {
 // looksLikeTable tells a table with a slip in its headings from a file of
 // another kind: one of its headings is a number of years, or "duration" by the job's own name for it.
 func (r *reader) looksLikeTable(name string, content []byte) bool {
-	if len(strings.TrimSpace(string(content))) == 0 {
+	wide := strings.HasPrefix(string(content), "\xff\xfe") || strings.HasPrefix(string(content), "\xfe\xff") // UTF-16, which readFile names
+	if wide || len(strings.TrimSpace(string(content))) == 0 {
 		return true
 	}
-	ignored := r.faults[:0:0]
+	var ignored fault.List
 	t := newTable("rainfall", name, bytes.TrimPrefix(content, []byte("\xef\xbb\xbf")), &ignored)
 	if !t.readHeadings() {
 		return true

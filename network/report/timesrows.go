@@ -152,3 +152,30 @@ func Branches(run *analysis.StormRun) []BranchRow {
 	}
 	return rows
 }
+
+// TrialRow is one round in which the sheet flow of an area settles on the storm.
+type TrialRow struct {
+	Area  string
+	Round int
+	hydrology.Trial
+}
+
+// TrialColumns are the columns of the rounds.
+var TrialColumns = []Column[TrialRow]{
+	{"area", []string{"area"}, Text, func(r *TrialRow) Value { return T(r.Area) }},
+	{"round", []string{"round"}, Count, func(r *TrialRow) Value { return N(float64(r.Round)) }},
+	{"assumed", []string{"assumed"}, Minutes, func(r *TrialRow) Value { return N(r.Assumed) }},
+	{"intensity", []string{"intensity"}, Intensity, func(r *TrialRow) Value { return N(r.Intensity) }},
+	{"minutes", []string{"follows"}, Minutes, func(r *TrialRow) Value { return N(r.Minutes) }},
+}
+
+// Trials lists the rounds of all areas with sheet flow by the kinematic wave.
+func Trials(run *analysis.StormRun) []TrialRow {
+	var rows []TrialRow
+	for _, w := range run.Paths {
+		for k, trial := range w.Trials {
+			rows = append(rows, TrialRow{run.Network.Areas[w.Path.Area].ID, k + 1, trial})
+		}
+	}
+	return rows
+}

@@ -44,6 +44,9 @@ func (s *sink) times(run *analysis.StormRun, table string) {
 	if table != "structures" {
 		writeArray(s, "areas", listed(report.LegColumns, report.Legs(run)))
 	}
+	if rounds := report.Trials(run); table != "structures" && len(rounds) > 0 {
+		writeArray(s, "rounds", listed(report.TrialColumns, rounds))
+	}
 	if table != "areas" {
 		writeArray(s, "structures", listed(report.BranchColumns, report.Branches(run)))
 	}

@@ -20,6 +20,9 @@ func Times(w io.Writer, r *analysis.Result, o Options) error {
 	p.heading(report.Heading(r))
 	p.timesOf(r, &r.Design, o, "")
 	if r.Check != nil {
+		if len(r.Check.Paths) == 0 && o.Table == "" {
+			o.Table = "structures" // the inlet times are those of the design storm
+		}
 		p.timesOf(r, r.Check, o, fmt.Sprintf(", check storm of %g years", r.Check.Storm.ReturnPeriod))
 	}
 	p.assumptions("Assumptions: what is not known", r.Network)
