@@ -57,7 +57,7 @@ func (d *pass) sendArrivals(p network.PipeIndex, share float64, last bool) {
 // time; where branches meet and part again they multiply. leastWays moments, and
 // waysPerArea for each area, are let through; over that the exact answer is out of reach.
 const (
-	leastWays   = 1 << 20
+	leastWays   = 1 << 18
 	waysPerArea = 32
 )
 

@@ -99,3 +99,19 @@ func TestAFaultOfALegHasItsLine(t *testing.T) {
 		t.Errorf("%v", faults)
 	}
 }
+
+// BenchmarkWalk reports the cost of a path of three legs with sheet flow, which settles in some fifteen rounds.
+func BenchmarkWalk(b *testing.B) {
+	path := times.Path{Lines: []int32{2, 3, 4}, Legs: []hydrology.Leg{
+		{Kind: hydrology.SheetKinematic, Length: 100, Slope: 0.02, N: 0.15},
+		{Kind: hydrology.Shallow, Length: 400, Slope: 0.02, Cover: "unpaved"},
+		{Kind: hydrology.Gutter, Length: 250, Slope: 0.01, N: 0.016, CrossSlope: 0.02, Spread: 5},
+	}}
+	settings := hydrology.Settings{Storm: rain(b), Minimum: 5}
+	paths := []times.Path{path}
+	for b.Loop() {
+		if _, faults := times.Walk(paths, func(network.AreaIndex) bool { return false }, settings); len(faults) > 0 {
+			b.Fatal(faults)
+		}
+	}
+}
