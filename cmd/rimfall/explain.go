@@ -16,10 +16,15 @@ import (
 
 var explainFormats = []string{"text", "markdown", "html"}
 
+// explainFlags are the flags of an explanation.
+type explainFlags struct {
+	format, kind string
+	run          analysis.Options
+}
+
 // explainCommand writes the working of a pipe, a structure or an area.
 func (a *app) explainCommand() *cobra.Command {
-	var format, kind string
-	var o analysis.Options
+	var e explainFlags
 	cmd := &cobra.Command{
 		Use:   "explain JOB ID",
 		Short: "Write the whole working of a pipe, a structure or an area, as by hand",
@@ -37,40 +42,45 @@ share an id both are explained; --kind names one.`,
 			return oneJob(cmd, args[:1])
 		},
 		RunE: func(cmd *cobra.Command, args []string) error {
-			if !slices.Contains(explainFormats, format) {
-				return usageError{fmt.Sprintf("--format %s: write one of %s", format, strings.Join(explainFormats, ", "))}
-			}
-			if cmd.Flags().Changed("storm") && !(o.ReturnPeriod > 0) {
+			if cmd.Flags().Changed("storm") && !(e.run.ReturnPeriod > 0) {
 				return usageError{"--storm takes a return period in years, over 0"}
 			}
-			kinds, err := oneKind(kind)
-			if err != nil {
-				return err
-			}
-			r, err := a.runJob(args[0], o)
-			if err != nil {
-				return err
-			}
-			pages, err := review.Explain(r, args[1], kinds...)
-			if err != nil {
-				return err
-			}
-			return a.write(func(w *bufio.Writer) error {
-				if format == "html" {
-					return page.Explain(w, r, pages)
-				}
-				return text.Explain(w, r, pages, format == "markdown")
-			})
+			return a.explain(args[0], args[1], &e)
 		},
 	}
 	f := cmd.Flags()
-	f.StringVar(&format, "format", "text", "how to print: "+strings.Join(explainFormats, ", "))
-	f.StringVar(&kind, "kind", "", "what has the id: "+strings.Join(review.Kinds, ", "))
-	f.Float64Var(&o.ReturnPeriod, "storm", 0, "design storm in `years`, in place of the job's")
-	f.BoolVar(&o.Size, "size", false, "choose what is blank first, as the command size does")
+	f.StringVar(&e.format, "format", "text", "how to print: "+strings.Join(explainFormats, ", "))
+	f.StringVar(&e.kind, "kind", "", "what has the id: "+strings.Join(review.Kinds, ", "))
+	f.Float64Var(&e.run.ReturnPeriod, "storm", 0, "design storm in `years`, in place of the job's")
+	f.BoolVar(&e.run.Size, "size", false, "choose what is blank first, as the command size does")
 	complete(cmd, "format", explainFormats)
 	complete(cmd, "kind", review.Kinds)
 	return cmd
+}
+
+// explain judges the flags, runs the job and prints.
+func (a *app) explain(dir, id string, e *explainFlags) error {
+	if !slices.Contains(explainFormats, e.format) {
+		return usageError{fmt.Sprintf("--format %s: write one of %s", e.format, strings.Join(explainFormats, ", "))}
+	}
+	kinds, err := oneKind(e.kind)
+	if err != nil {
+		return err
+	}
+	r, err := a.runJob(dir, e.run)
+	if err != nil {
+		return err
+	}
+	pages, err := review.Explain(r, id, kinds...)
+	if err != nil {
+		return err
+	}
+	return a.write(func(w *bufio.Writer) error {
+		if e.format == "html" {
+			return page.Explain(w, r, pages)
+		}
+		return text.Explain(w, r, pages, e.format == "markdown")
+	})
 }
 
 // oneKind is the kind that a word names; none where it is blank.

@@ -111,65 +111,70 @@ func told(c *review.Comparison) []string {
 	return all
 }
 
+// comparedCase is a change to twoPipes and what a comparison with it tells.
+type comparedCase struct {
+	name    string
+	replace []string
+	want    []string // these stand in what is told
+	not     []string // and no line begins with these
+	worse   bool
+}
+
+var comparedCases = []comparedCase{
+	{
+		"a job is like itself", nil, nil,
+		[]string{"setting", "added", "removed", "given", "new", "worse", "cured"},
+		false,
+	},
+	{
+		"rows in another order change nothing",
+		[]string{"P1,A,B,200,15,101,100\nP2,B,OUT,200,15,99.9,98.9\n", "P2,B,OUT,200,15,99.9,98.9\nP1,A,B,200,15,101,100\n"},
+		nil,
+		[]string{"setting", "added", "removed", "given", "new", "worse", "cured"},
+		false,
+	},
+	{
+		"an area that comes brings 5 cfs, over 4.57",
+		[]string{"F1,A,2,0.5,10\n", "F1,A,2,0.5,10\nF2,A,0.5,0.5,10\n"},
+		[]string{"added area F2", "new capacity P1", "new capacity P2"},
+		[]string{"removed", "given", "cured capacity"},
+		true,
+	},
+	{
+		"a pipe of another size is given and cures nothing that was not there",
+		[]string{"P2,B,OUT,200,15", "P2,B,OUT,200,18"},
+		[]string{"given pipe P2 size"},
+		[]string{"added", "removed", "worse"},
+		true, // crowns no longer line up
+	},
+	{
+		"a pipe under another id was removed and added",
+		[]string{"P2,B", "P9,B"},
+		[]string{"added pipe P9", "removed pipe P2"},
+		[]string{"given pipe"},
+		false,
+	},
+	{
+		"a pipe that leads elsewhere is the same pipe with another end",
+		[]string{"OUT,outfall", "OUT,outfall,103\nELSE,outfall", "B,OUT", "B,ELSE"},
+		[]string{"added structure ELSE", "given pipe P2 to", "new unused-outfall OUT"},
+		[]string{"removed"},
+		false, // the notice does not count
+	},
+	{
+		"other criteria are settings",
+		[]string{"return_period = 10", "return_period = 10\n[criteria]\nmin_cover = 8"},
+		[]string{"setting min_cover", "new cover P1", "new cover P2"},
+		[]string{"given"},
+		true,
+	},
+	{
+		"other rain under the same name is told", []string{"5,4\n", "5,4.1\n"}, []string{"setting intensities"}, []string{"given", "setting rainfall"}, false,
+	},
+}
+
 func TestComparisonNamesWhatChanged(t *testing.T) {
-	for _, c := range []struct {
-		name    string
-		replace []string
-		want    []string // these stand in what is told
-		not     []string // and no line begins with these
-		worse   bool
-	}{
-		{
-			"a job is like itself", nil, nil,
-			[]string{"setting", "added", "removed", "given", "new", "worse", "cured"},
-			false,
-		},
-		{
-			"rows in another order change nothing",
-			[]string{"P1,A,B,200,15,101,100\nP2,B,OUT,200,15,99.9,98.9\n", "P2,B,OUT,200,15,99.9,98.9\nP1,A,B,200,15,101,100\n"},
-			nil,
-			[]string{"setting", "added", "removed", "given", "new", "worse", "cured"},
-			false,
-		},
-		{
-			"an area that comes brings 5 cfs, over 4.57",
-			[]string{"F1,A,2,0.5,10\n", "F1,A,2,0.5,10\nF2,A,0.5,0.5,10\n"},
-			[]string{"added area F2", "new capacity P1", "new capacity P2"},
-			[]string{"removed", "given", "cured capacity"},
-			true,
-		},
-		{
-			"a pipe of another size is given and cures nothing that was not there",
-			[]string{"P2,B,OUT,200,15", "P2,B,OUT,200,18"},
-			[]string{"given pipe P2 size"},
-			[]string{"added", "removed", "worse"},
-			true, // crowns no longer line up
-		},
-		{
-			"a pipe under another id was removed and added",
-			[]string{"P2,B", "P9,B"},
-			[]string{"added pipe P9", "removed pipe P2"},
-			[]string{"given pipe"},
-			false,
-		},
-		{
-			"a pipe that leads elsewhere is the same pipe with another end",
-			[]string{"OUT,outfall", "OUT,outfall,103\nELSE,outfall", "B,OUT", "B,ELSE"},
-			[]string{"added structure ELSE", "given pipe P2 to", "new unused-outfall OUT"},
-			[]string{"removed"},
-			false, // the notice does not count
-		},
-		{
-			"other criteria are settings",
-			[]string{"return_period = 10", "return_period = 10\n[criteria]\nmin_cover = 8"},
-			[]string{"setting min_cover", "new cover P1", "new cover P2"},
-			[]string{"given"},
-			true,
-		},
-		{
-			"other rain under the same name is told", []string{"5,4\n", "5,4.1\n"}, []string{"setting intensities"}, []string{"given", "setting rainfall"}, false,
-		},
-	} {
+	for _, c := range comparedCases {
 		t.Run(c.name, func(t *testing.T) {
 			got := asCompared(t, asRun(t, twoPipes), asRun(t, twoPipes, c.replace...))
 			lines := told(got)

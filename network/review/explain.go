@@ -6,6 +6,7 @@ import (
 
 	"rimfall/network"
 	"rimfall/network/analysis"
+	"rimfall/network/fault"
 	"rimfall/network/finding"
 	"rimfall/network/review/formula"
 )
@@ -75,9 +76,19 @@ func Explain(r *analysis.Result, id string, kinds ...Kind) ([]Explanation, error
 		}
 	}
 	if len(all) == 0 {
-		return nil, fmt.Errorf("no pipe, structure or area %q in %s", id, r.Job.Dir)
+		return nil, fmt.Errorf("no pipe, structure or area %q in %s%s", id, r.Job.Dir, nearestID(r, id))
 	}
 	return all, nil
+}
+
+// nearestID suggests the id that is nearly the one asked for; nothing where none is.
+func nearestID(r *analysis.Result, id string) string {
+	n := r.Network
+	known := slices.Concat(ids(n.Pipes, pipeID), ids(n.Structures, structureID), ids(n.Areas, areaID))
+	if near, ok := fault.Nearest(id, known); ok {
+		return "; did you mean \"" + near + "\"?"
+	}
+	return ""
 }
 
 // explainPipe is the page of a pipe: flow, section, grade line, criteria.
