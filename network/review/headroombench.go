@@ -151,6 +151,7 @@ func (b *bench) load(at network.StructureIndex) {
 	b.at, b.runs = at, 0
 	b.path = b.below(at, b.changed, b.path[:0])
 	b.runner.sweep.Keep(&b.kept)
+	b.runner.sweep.Way(b.changed)
 }
 
 // run adds an area or a steady flow at the structure and computes what is below it; the flows are those of the
@@ -163,7 +164,7 @@ func (b *bench) run(area, flow float64) (run state, ok bool) {
 	if area > 0 {
 		added.Area, added.C, added.Time = area, b.options.C, network.Some(b.options.Time)
 	}
-	flows, problems := b.runner.sweep.Below(b.changed)
+	flows, problems := b.runner.sweep.Below()
 	run = b.state(flows)
 	at.Inflow = given
 	added.Area, added.C, added.Time = 0, 0, network.Maybe{}

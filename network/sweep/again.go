@@ -10,6 +10,7 @@ import (
 type Again struct {
 	pass
 	downstream []network.StructureIndex
+	way        way
 }
 
 // NewAgain makes room for passes over a connected network without cycles, with one kind of peak.
@@ -30,25 +31,6 @@ func (a *Again) Down(storm *network.Storm, rain hydrology.Intensity) (*Flows, []
 	clear(a.flows.Pipes)
 	clear(a.flows.Structures)
 	for _, s := range a.downstream {
-		a.through(s)
-	}
-	return a.end()
-}
-
-// Below repeats a pass after something changed at one structure: on the way down from it, where changed is true for
-// the structures, everything is computed anew, and elsewhere the flows stay as they are. The storm is that of
-// the last pass.
-func (a *Again) Below(changed []bool) (*Flows, []network.Problem) {
-	a.begin(a.storm, a.rain)
-	for _, s := range a.downstream {
-		if !changed[s] {
-			a.hand(s)
-			continue
-		}
-		a.flows.Structures[s] = Structure{}
-		for _, p := range a.n.PipesOut(s) {
-			a.flows.Pipes[p] = Pipe{}
-		}
 		a.through(s)
 	}
 	return a.end()
@@ -92,14 +74,6 @@ func (a *Again) through(s network.StructureIndex) {
 		a.travel(p)
 	}
 	a.send(out)
-}
-
-// hand hands the areas on at a structure whose flows stay.
-func (a *Again) hand(s network.StructureIndex) {
-	if a.arrivals != nil {
-		a.reached = a.gatherArrivals(s)
-		a.send(a.n.PipesOut(s))
-	}
 }
 
 // send sends the areas at a structure down its pipes out; where there are none they leave.
