@@ -100,3 +100,34 @@ func TestWhatHasNoSuchIDIsRefused(t *testing.T) {
 		t.Error("pipe P1 is explained as an area")
 	}
 }
+
+// A line whose formula does not give what the run has found is written without one. That is meant for the depths that
+// a water surface sets, so these lines must have their formula: friction in a full pipe, the account of the losses, the
+// depth at an outfall, and all of a circle.
+func TestLinesThatHaveAFormulaAreWrittenWithIt(t *testing.T) {
+	worked := map[string]int{}
+	for _, settings := range []string{"", "[grade]\nstructure_loss = \"coefficient\"\noutfall_start = \"critical\""} {
+		r := asRun(t, anyKind, "SETTINGS", settings)
+		for i := range r.Network.Pipes {
+			round := r.Network.Pipes[i].Shape == "circle"
+			for _, l := range printedLines(t, r, r.Network.Pipes[i].ID, review.OfPipe) {
+				circle := round && (strings.HasPrefix(l.name, "wetted") || l.name == "top width")
+				switch l.name {
+				case "height of the grade line, upper end", "and losses make the energy line, lower end", "depth at the outfall", "depth at the free outfall", "fast water starts at critical depth", "depth at the lower end":
+				default:
+					if !circle {
+						continue
+					}
+				}
+				if worked[l.name]++; l.numbers == "" {
+					t.Errorf("%s: %s has no formula: %s = %s [%s]", l.page, l.name, l.symbol, l.result, l.source)
+				}
+			}
+		}
+	}
+	for name, least := range map[string]int{"height of the grade line, upper end": 6, "and losses make the energy line, lower end": 15, "depth at the outfall": 2, "fast water starts at critical depth": 2, "wetted area": 30, "depth at the lower end": 2} {
+		if worked[name] < least {
+			t.Errorf("%s: %d lines, want %d at least", name, worked[name], least)
+		}
+	}
+}
