@@ -193,3 +193,23 @@ func BenchmarkCarries(b *testing.B) {
 		findCarries(b, s, 0)
 	}
 }
+
+func TestAPipeOfAPlanIsInTheClassOfItsPeriod(t *testing.T) {
+	s := read(t, millStreet) // columns 2, 5, 10, 25, 50, 100
+	c := &CarriesReport{Subject: s, Carries: &Carries{Pipes: []PipeCarries{
+		{},
+		{Capacity: Carried{Judged: true, None: true}},
+		{Capacity: Carried{Judged: true, Period: 2}},
+		{Capacity: Carried{Judged: true, Period: 9.99}},
+		{Capacity: Carried{Judged: true, Period: 10}},
+		{Capacity: Carried{Judged: true, Period: 99}},
+		{Capacity: Carried{Judged: true, All: true, Period: 100}},
+	}}}
+	words, class := c.CarriesClasses(Capacity, 6)
+	if want := []string{"under 2 years", "2 to 5 years", "5 to 10 years", "10 to 25 years", "25 to 100 years", "100 years and more"}; !reflect.DeepEqual(words, want) {
+		t.Errorf("classes %q, want %q", words, want)
+	}
+	if want := []int{-1, 0, 1, 2, 3, 4, 5}; !reflect.DeepEqual(class, want) {
+		t.Errorf("pipes in classes %v, want %v", class, want)
+	}
+}
