@@ -111,13 +111,13 @@ func (r *reader) between(p network.PipeIndex, e network.End, up, down network.Re
 	}
 	return network.Assumption{
 		Pipe: p, What: invertWords[e], Value: level.V, Unit: r.settings.Units.Length,
-		Because: fmt.Sprintf("on the straight line from %s to %s", r.reachWords(up, "up"), r.reachWords(down, "down")),
+		Because: fmt.Sprintf("on the line from %s to %s", r.reachWords(up, "up"), r.reachWords(down, "down")),
 	}, true
 }
 
 func (r *reader) reachWords(at network.Reach, way string) string {
 	number := func(v float64) string { return strconv.FormatFloat(v, 'f', -1, 64) }
-	return fmt.Sprintf("%s (pipe %s, %s end, %.2f %s %sstream)", number(at.Level), r.network.Pipes[at.Pipe].ID, at.End, at.Distance, r.settings.Units.Length, way)
+	return fmt.Sprintf("%s (%s, %s end, %.2f %s %s)", number(at.Level), r.network.Pipes[at.Pipe].ID, at.End, at.Distance, r.settings.Units.Length, way)
 }
 
 // assumedSlopes gives the pipes whose inverts are now known their slope, and finds those that are

@@ -65,7 +65,7 @@ func (s *sheet) accessHole(at network.StructureIndex, w *grade.Working, line *gr
 	s.given("g", "gravity", s.units.Gravity, u+"/s²", standardGravity)
 	s.set("N", float64(out.Count), "")
 	s.found("E_i", "energy inside the pipe, over its invert", "EGL_o − z_o", w.Energy, u, fromHole)
-	s.found("DI", "discharge intensity", "Q_o/N/(A_o × √(g × D_o))", w.Intensity, "", fromHoleRead+" eq. 10-40")
+	s.found("DI", "discharge intensity", "Q_o/N/(A_o × √(g × D_o))", w.Intensity, "", fromHoleRead)
 	s.part("Energy in the structure before its losses")
 	candidates := []string{"E_i"}
 	if w.Full {
