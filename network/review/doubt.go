@@ -75,6 +75,9 @@ func (s *Subject) FindDoubt(o DoubtOptions) (*Doubt, error) {
 	if o.Runs == 0 {
 		o.Runs = DefaultRuns
 	}
+	if err := s.roomFor(o.Runs); err != nil {
+		return nil, err
+	}
 	rain, err := s.rain(s.Storm.ReturnPeriod)
 	if err != nil {
 		return nil, err
@@ -97,6 +100,18 @@ func (s *Subject) FindDoubt(o DoubtOptions) (*Doubt, error) {
 	}
 	d.Pipes, d.Structures = kept.statistics(threads)
 	return d, nil
+}
+
+// mostKept is how many results of pipes and structures are kept at most, over all runs: about 1.4 GB.
+const mostKept = 80_000_000
+
+// roomFor refuses more runs than memory holds, since every run of every place is kept for its quantiles and ranks.
+func (s *Subject) roomFor(runs int) error {
+	places := len(s.Network.Pipes) + len(s.Network.Structures)
+	if places*runs <= mostKept {
+		return nil
+	}
+	return fault.List{{Text: fmt.Sprintf("%d runs of %d pipes and structures are more than are kept in memory; take at most %d runs", runs, places, mostKept/places)}}
 }
 
 // makeRuns makes all runs and keeps what they show.

@@ -7,6 +7,7 @@ import (
 	"path/filepath"
 	"reflect"
 	"slices"
+	"strings"
 	"testing"
 
 	"rimfall/hydrology"
@@ -246,6 +247,13 @@ func boundedMillStreet(t *testing.T) string {
 		t.Fatal(err)
 	}
 	return dir
+}
+
+func TestMoreRunsThanMemoryHoldsAreRefused(t *testing.T) {
+	s := read(t, millStreet)
+	if _, err := s.FindDoubt(usually(3_000_000)); err == nil || !strings.Contains(err.Error(), "take at most 2666666 runs") {
+		t.Errorf("%v", err)
+	}
 }
 
 func TestARunAllocatesNothing(t *testing.T) {
