@@ -36,7 +36,7 @@ type findingKey struct {
 
 // severalTimes are the rules that may speak of one subject more than once, of its ends or its
 // neighbours. Their messages differ then by more than numbers.
-var severalTimes = []string{"cover", "cover-along-pipe", "crossing-clearance", "lowest-invert", "size-change", "drop-structure"}
+var severalTimes = []string{"cover", "cover-along-pipe", "crossing-clearance", "lowest-invert", "size-change", "drop-structure", "assumed", "path-limit", "rainfall-remark"}
 
 var numbers = regexp.MustCompile(`-?[0-9]+(\.[0-9]+)?`)
 
