@@ -19,17 +19,17 @@ func Headroom(w io.Writer, h *review.HeadroomReport, o Options) error {
 		"Peaks by partial area, whatever the job says: the larger of the longest time and any shorter one. Rounded down",
 	}, h.Subject.Grounds()...))
 	p.table("Headroom at the structures", makeGrid(p.style, review.HeadroomColumns, h.Rows()))
-	if aside := h.SetAsideRows(); len(aside) > 0 {
-		p.table(fmt.Sprintf("Set aside: %d limits are broken already, and count no more", len(aside)), setAsideGrid(p.style, aside))
-	}
+	p.setAside(h.SetAsideRows())
 	p.assumptions("Assumptions: what is not known", h.Subject.Network)
 	p.cautions()
 	return p.err
 }
 
-// setAsideGrid lists what is set aside by rule, the places of a rule in a row.
-func setAsideGrid(style report.Style, aside []review.SetAsideRow) grid {
-	type ofRule struct{ rule, places string }
+// ofRule are the places of one rule.
+type ofRule struct{ rule, places string }
+
+// setAside lists what is broken already by rule: wrapped in a terminal, as a table in Markdown.
+func (p *printer) setAside(aside []review.SetAsideRow) {
 	var rules []ofRule
 	for _, a := range aside {
 		if k := len(rules) - 1; k >= 0 && rules[k].rule == a.Rule {
@@ -38,8 +38,19 @@ func setAsideGrid(style report.Style, aside []review.SetAsideRow) grid {
 		}
 		rules = append(rules, ofRule{a.Rule, a.ID})
 	}
-	return makeGrid(style, []report.Column[ofRule]{
+	if len(rules) == 0 {
+		return
+	}
+	title := fmt.Sprintf("Set aside: %d limits are broken already, and count no more", len(aside))
+	if !p.markdown {
+		p.title(title)
+		for _, r := range rules {
+			p.wrapped(fmt.Sprintf("%-10s  ", r.rule), r.places)
+		}
+		return
+	}
+	p.table(title, makeGrid(p.style, []report.Column[ofRule]{
 		{Key: "rule", Head: []string{"rule"}, Value: func(r *ofRule) report.Value { return report.T(r.rule) }},
 		{Key: "places", Head: []string{"places"}, Value: func(r *ofRule) report.Value { return report.T(r.places) }},
-	}, rules)
+	}, rules))
 }
