@@ -61,26 +61,37 @@ func (t *table) unlessUnknown(field, text string) string {
 	return text
 }
 
-// assume fills in what is not known of existing pipes and lists it. A pipe that is checked needs a
-// slope in the end; where its inverts lie beyond the last known one, that is a fault.
+// assume fills in what is not known of existing pipes and lists it.
 func (r *reader) assume() {
 	n := r.network
-	up, down, ok := n.KnownInverts()
-	if !ok {
-		return
-	}
-	var levels []network.Assumption
+	unknown := false
 	for i := range n.Pipes {
 		p := &n.Pipes[i]
-		if !p.Existing {
-			continue
-		}
-		if p.AssumedN {
+		if p.Existing && p.AssumedN {
 			n.Assumptions = append(n.Assumptions, network.Assumption{
 				Pipe: network.PipeIndex(i), What: "n", Value: p.N, Because: "neither n nor material is given: n of the criteria",
 			})
 		}
-		if p.Slope.OK || p.Length <= 0 {
+		unknown = unknown || lacksLevels(p)
+	}
+	if !unknown {
+		return // most jobs: nothing is looked for
+	}
+	if up, down, ok := n.KnownInverts(); ok {
+		r.assumeInverts(up, down)
+	}
+}
+
+// lacksLevels tells whether an existing pipe has neither both inverts nor a slope.
+func lacksLevels(p *network.Pipe) bool { return p.Existing && !p.Slope.OK && p.Length > 0 }
+
+// assumeInverts takes the inverts that lie between known ones. All are found before one is set:
+// what is assumed is no known level.
+func (r *reader) assumeInverts(up, down [][2]network.Reach) {
+	n := r.network
+	var levels []network.Assumption
+	for i := range n.Pipes {
+		if !lacksLevels(&n.Pipes[i]) {
 			continue
 		}
 		for _, e := range []network.End{network.Upper, network.Lower} {
@@ -89,16 +100,18 @@ func (r *reader) assume() {
 			}
 		}
 	}
-	for _, a := range levels { // all are found before one is set: what is assumed is no known level
+	for _, a := range levels {
 		p := &n.Pipes[a.Pipe]
 		if a.What == invertWords[network.Upper] {
 			p.InvertUpper, p.AssumedUpper = network.Some(a.Value), true
 		} else {
 			p.InvertLower, p.AssumedLower = network.Some(a.Value), true
 		}
+		if p.InvertUpper.OK && p.InvertLower.OK {
+			p.Slope = network.Some((p.InvertUpper.V - p.InvertLower.V) / p.Length)
+		}
 	}
 	n.Assumptions = append(n.Assumptions, levels...)
-	r.assumedSlopes()
 }
 
 var invertWords = [...]string{network.Upper: "invert, upper end", network.Lower: "invert, lower end"}
@@ -120,20 +133,6 @@ func (r *reader) reachWords(at network.Reach, way string) string {
 	return fmt.Sprintf("%s (%s, %s end, %.2f %s %s)", number(at.Level), r.network.Pipes[at.Pipe].ID, at.End, at.Distance, r.settings.Units.Length, way)
 }
 
-// assumedSlopes gives the pipes whose inverts are now known their slope, and finds those that are
-// to be checked without one.
-func (r *reader) assumedSlopes() {
-	n := r.network
-	for i := range n.Pipes {
-		p := &n.Pipes[i]
-		switch {
-		case !p.Existing || p.Slope.OK || p.Length <= 0:
-		case p.InvertUpper.OK && p.InvertLower.OK:
-			p.Slope = network.Some((p.InvertUpper.V - p.InvertLower.V) / p.Length)
-		}
-	}
-}
-
 // judgeSlopes finds existing pipes that are to be checked and have no slope: neither given nor
 // on a line between known inverts.
 func (r *reader) judgeSlopes(j *Job) {
@@ -142,7 +141,7 @@ func (r *reader) judgeSlopes(j *Job) {
 	}
 	for i := range r.network.Pipes {
 		p := &r.network.Pipes[i]
-		if p.Existing && !p.Slope.OK && p.Length > 0 {
+		if lacksLevels(p) {
 			r.faults = append(r.faults, j.Locate(network.Problem{
 				Table: "pipes", Line: int(p.Line), Field: "slope",
 				Text: fmt.Sprintf("pipe %s has no slope, and its inverts do not lie between known ones of existing pipes: write the slope or both inverts, or a known invert farther up and farther down", p.ID),
