@@ -28,8 +28,8 @@ func Headroom(w io.Writer, h *review.HeadroomReport, o Options) error {
 // ofRule are the places of one rule.
 type ofRule struct{ rule, places string }
 
-// setAside lists what is broken already by rule: wrapped in a terminal, as a table in Markdown.
-func (p *printer) setAside(aside []review.SetAsideRow) {
+// byRule gathers what is broken already by rule.
+func byRule(aside []review.SetAsideRow) []ofRule {
 	var rules []ofRule
 	for _, a := range aside {
 		if k := len(rules) - 1; k >= 0 && rules[k].rule == a.Rule {
@@ -38,19 +38,29 @@ func (p *printer) setAside(aside []review.SetAsideRow) {
 		}
 		rules = append(rules, ofRule{a.Rule, a.ID})
 	}
-	if len(rules) == 0 {
+	return rules
+}
+
+// setAside lists what is broken already: wrapped in a terminal, as a table in Markdown.
+func (p *printer) setAside(aside []review.SetAsideRow) {
+	if len(aside) == 0 {
 		return
 	}
 	title := fmt.Sprintf("Set aside: %d limits are broken already, and count no more", len(aside))
-	if !p.markdown {
-		p.title(title)
-		for _, r := range rules {
-			p.wrapped(fmt.Sprintf("%-10s  ", r.rule), r.places)
-		}
+	if p.markdown {
+		p.table(title, setAsideGrid(p.style, aside))
 		return
 	}
-	p.table(title, makeGrid(p.style, []report.Column[ofRule]{
+	p.title(title)
+	for _, r := range byRule(aside) {
+		p.wrapped(fmt.Sprintf("%-10s  ", r.rule), r.places)
+	}
+}
+
+// setAsideGrid lists what is set aside by rule, the places of a rule in a row.
+func setAsideGrid(style report.Style, aside []review.SetAsideRow) grid {
+	return makeGrid(style, []report.Column[ofRule]{
 		{Key: "rule", Head: []string{"rule"}, Value: func(r *ofRule) report.Value { return report.T(r.rule) }},
 		{Key: "places", Head: []string{"places"}, Value: func(r *ofRule) report.Value { return report.T(r.places) }},
-	}, rules))
+	}, byRule(aside))
 }
