@@ -35,10 +35,10 @@
 //
 // # How exact, and at what cost
 //
-// Against an independent solution (scipy, 5,000 invented circles, boxes and ellipses of every regime, slopes -0.02 to
-// 0.1) the depths at the ends differ by 3.6e-5 of the rise at most, the place of a jump by 1.1e-5 of the length.
-// Inside, against a sum of 20,000 steps, 1.6e-4; in outlines with corners (arches, haunched boxes) 5.6e-4, off critical
-// depth by 1 % of the rise. A profile measures about 22 sections.
+// Against an independent solution (scipy, 136 stored cases: invented circles, boxes and ellipses of every regime, slopes -0.02 to
+// 0.1) the depths at the ends differ by less than 5e-5 of the rise, and the place of a jump by less than 5e-5 of the length.
+// Inside, against a sum of 20,000 steps, by less than 2e-4; in outlines with corners (arches, haunched boxes) 6e-4, off critical
+// depth by 1 % of the rise. A profile measures a few dozen sections.
 //
 // # Units and limits
 //
