@@ -73,7 +73,7 @@ code; a licensed engineer checks and signs.`,
 	root.AddCommand(a.checkCommand(), a.sizeCommand(), a.scheduleCommand(), a.newCommand(), a.rulesCommand(), a.manningCommand(), a.sizesCommand())
 	root.AddCommand(a.profileCommand(), a.planCommand())
 	root.AddCommand(a.rainCommand(), a.timesCommand())
-	root.AddCommand(a.carriesCommand(), a.headroomCommand(), a.doubtCommand())
+	root.AddCommand(a.carriesCommand(), a.headroomCommand(), a.doubtCommand(), a.reliefCommand())
 	root.AddCommand(a.compareCommand(), a.explainCommand())
 	root.SetFlagErrorFunc(func(cmd *cobra.Command, err error) error {
 		return usageError{plainFlagError(err) + "; see `" + cmd.CommandPath() + " --help`"}

@@ -23,6 +23,7 @@ type Job struct {
 	Rain       Rain
 	Catalog    catalog.Catalog
 	Departures []Departure
+	Costs      Costs
 	Paths      []times.Path // flow paths of areas, in the order of the areas
 
 	givenTime []bool            // of each area
@@ -95,6 +96,7 @@ func (r *reader) readTables(j *Job, rules []string) {
 		}
 	}
 	r.readAlong()
+	r.readCosts(j)
 	if r.has(r.settings.Files["departures"]) {
 		if t, ok := r.open("departures", "rule", "subject", "reason"); ok {
 			j.Departures = r.readDepartures(t, rules)

@@ -48,6 +48,7 @@ var tableFiles = map[string]string{
 	"crossings":  "crossings.csv",
 	"pieces":     "pieces.csv",
 	"paths":      "paths.csv",
+	"costs":      "costs.csv",
 }
 
 // defaults are the settings of an empty job.toml in a system of units.

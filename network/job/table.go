@@ -28,6 +28,7 @@ var tableFields = map[string][]string{
 	"crossings":  csvFields[crossingRow](),
 	"pieces":     csvFields[pieceRow](),
 	"paths":      csvFields[pathRow](),
+	"costs":      csvFields[costRow](),
 }
 
 func csvFields[R any]() []string {
