@@ -107,6 +107,9 @@ func (a *app) rain(names []string, f *rainFlags) error {
 	if err != nil {
 		return err
 	}
+	if f.fit && f.format == "csv" {
+		return usageError{"--fit prints as table, markdown or json; csv holds the table of intensities alone"}
+	}
 	s, err := a.readRain(names, o)
 	if err != nil {
 		return err
@@ -131,6 +134,9 @@ func (a *app) readRain(names []string, o rain.Options) (*rain.Source, error) {
 		return nil, usageError{"name a rainfall file, or a job folder; see `rimfall rain --help`"}
 	}
 	if info, err := os.Stat(names[0]); len(names) == 1 && err == nil && info.IsDir() {
+		if o.Bound != rainfile.Estimate {
+			return nil, usageError{"a job names the bound that it runs on, in [storm] bound; --bound is for a file"}
+		}
 		return rainOfJob(names[0], o)
 	}
 	contents, err := readContents(names)
@@ -158,7 +164,9 @@ func rainOfJob(dir string, o rain.Options) (*rain.Source, error) {
 	if described == "" {
 		described = fmt.Sprintf("%s · %s series · %s", j.Rain.File, j.Rain.Series, unit)
 	}
-	return rain.OfTable(table, unit, j.Rain.Series, j.Rain.Place, described, o), nil
+	source := rain.OfTable(table, unit, j.Rain.Series, j.Rain.Place, described, o)
+	source.Bound = j.Rain.Bound
+	return source, nil
 }
 
 // writeRain writes the files that --out and --plot ask for.

@@ -1,6 +1,8 @@
 package analysis
 
 import (
+	"fmt"
+
 	"rimfall/hydrology"
 	"rimfall/network"
 	"rimfall/network/finding"
@@ -27,8 +29,30 @@ func Timed(j *job.Job, n *network.Network, rain hydrology.Intensity) (*network.N
 func rainRemarks(j *job.Job, period float64) *finding.Rain {
 	rain := &finding.Rain{File: j.Rain.File, Given: string(j.Rain.Unit), Used: j.Settings.Units.Intensity, Remarks: j.Rain.Notices}
 	rain.Lower, rain.Upper, _ = j.Between(period)
+	if check := j.Settings.Storm.CheckPeriod; check.OK && check.V != period && sameRain(j, period, check.V) {
+		rain.Remarks = append(rain.Remarks[:len(rain.Remarks):len(rain.Remarks)], fmt.Sprintf(
+			"the rainfall is the same for %g and for %g years: the equation is that of one storm; give it a period_exponent, or one equation for each return_period", period, check.V))
+	}
 	if !j.Rain.Converted {
 		rain.Given = rain.Used
 	}
 	return rain
+}
+
+// sameRain tells whether two storms have the same intensities at the durations of
+// a drain, as an equation of one storm gives them.
+func sameRain(j *job.Job, a, b float64) bool {
+	first, ok1 := j.Curve(a)
+	second, ok2 := j.Curve(b)
+	if !ok1 || !ok2 {
+		return false
+	}
+	for _, minutes := range []float64{5, 15, 60} {
+		x, _ := first.At(minutes)
+		y, _ := second.At(minutes)
+		if x != y {
+			return false
+		}
+	}
+	return true
 }

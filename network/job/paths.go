@@ -196,7 +196,16 @@ func (r *reader) pathSurface(t *table, row *pathRow, l *hydrology.Leg) {
 	} else if i := slices.IndexFunc(covers, func(c hydrology.Cover) bool { return strings.EqualFold(c.Name, name) }); i >= 0 {
 		l.N = covers[i].Coefficient
 	} else {
-		known := slices.Concat(coverNames(covers), slices.Collect(maps.Keys(r.surfaces)))
+		if _, listed := r.surfaces[name]; listed {
+			t.faultAt("surface", "surface %q of %s has no n for sheet flow: write it in its column n, or in this row", name, r.settings.Files["surfaces"])
+			return
+		}
+		known := coverNames(covers)
+		for own, s := range r.surfaces {
+			if s.n.OK {
+				known = append(known, own)
+			}
+		}
 		t.faultAt("surface", "surface %q has no n: %s; or write n", name, fault.Suggest(name, known))
 	}
 }

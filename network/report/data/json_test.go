@@ -148,6 +148,12 @@ func TestNumbersOfJSONAreTheNumbersOfTheRun(t *testing.T) {
 				"length": p.Length, "n": p.N, "slope": p.Slope.V, "ca": q.CA, "flow": q.Flow, "capacity": q.Capacity,
 				"depth": q.Depth, "velocity": q.Velocity, "travel_time": q.TravelTime, "time": q.Time, "intensity": q.Intensity,
 			} {
+				if _, given := row[key]; key == "capacity" && p.Slope.V <= 0 {
+					if given {
+						t.Errorf("%s: pipe %s does not fall and has a capacity of %s", dir, p.ID, row[key])
+					}
+					continue
+				}
 				if got, err := strconv.ParseFloat(string(row[key]), 64); err != nil || got != want {
 					t.Errorf("%s: pipe %s: %s is %s, in the run %v", dir, p.ID, key, row[key], want)
 				}

@@ -115,7 +115,7 @@ func (s *sheet) words(x, y, size float64, text string) {
 
 // titled draws the strip's notes and title. What every report says stands on every sheet.
 func (s *sheet) titled(r *run, h heading) {
-	s.notes(slices.Concat(assumedNote(r.Network), h.notes, report.Cautions))
+	s.notes(slices.Concat(h.notes[:1], assumedNote(r.Network), h.notes[1:], report.Cautions))
 	box := s.titleBox()
 	s.Line(Point{box.Left, box.Top}, Point{box.Left, box.Bottom}, medium)
 	lines := report.Heading(r.Result)
@@ -160,7 +160,7 @@ func (s *sheet) notes(notes []string) {
 		rest = append(rest, wrap(n, smallType, width)...)
 	}
 	if room := int((box.height()-3)/step) - len(rest); len(first) > room {
-		first = append(first[:room-1], "… and more; see the table of findings")
+		first = append(first[:max(room-1, 0)], "… and more; see the table of findings")
 	}
 	for i, l := range append(first, rest...) {
 		s.words(box.Left+margin, box.Top+4+float64(i)*step, smallType, l)
