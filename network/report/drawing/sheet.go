@@ -125,8 +125,11 @@ func (s *sheet) titled(r *run, h heading) {
 	s.Text(fit(Label{At: Point{left, y}, Size: 4.2, Bold: true, Text: lines[0]}, width, typeSize))
 	y += 4.8
 	s.Text(fit(Label{At: Point{left, y}, Size: 3.2, Bold: true, Text: h.title}, width, smallType))
-	for _, l := range append(append([]string(nil), lines[1:]...), h.lines...) {
-		y += lineHeight - 0.1
+	rest := slices.Concat(lines[1:], h.lines)
+	const signatureHeight, gap = 7.5, 1.0
+	step := min(lineHeight-0.1, (box.Bottom-signatureHeight-gap-y)/float64(len(rest)))
+	for _, l := range rest {
+		y += step
 		s.Text(fit(Label{At: Point{left, y}, Size: typeSize, Text: l}, width, 1.8))
 	}
 	s.signatures(box, h.count)
@@ -134,7 +137,8 @@ func (s *sheet) titled(r *run, h heading) {
 
 // signatures draws the boxes that people fill in by hand, and the count of sheets.
 func (s *sheet) signatures(box Box, count string) {
-	top := box.Bottom - 7.5
+	const signatureHeight = 7.5
+	top := box.Bottom - signatureHeight
 	s.Line(Point{box.Left, top}, Point{box.Right, top}, thin)
 	names := []string{"designed", "checked", "date", "seal"}
 	width := box.width() / float64(len(names)+1)
