@@ -127,7 +127,7 @@ func (s *sheet) titled(r *run, h heading) {
 	s.Text(fit(Label{At: Point{left, y}, Size: 3.2, Bold: true, Text: h.title}, width, smallType))
 	rest := slices.Concat(lines[1:], h.lines)
 	const signatureHeight, gap = 7.5, 1.0
-	step := min(lineHeight-0.1, (box.Bottom-signatureHeight-gap-y)/float64(len(rest)))
+	step := min(lineHeight-0.1, (box.Bottom-signatureHeight-1-y)/float64(len(rest)))
 	for _, l := range rest {
 		y += step
 		s.Text(fit(Label{At: Point{left, y}, Size: typeSize, Text: l}, width, 1.8))
@@ -135,9 +135,11 @@ func (s *sheet) titled(r *run, h heading) {
 	s.signatures(box, h.count)
 }
 
+// signatureHeight is that of the boxes for people's hands, mm.
+const signatureHeight = 7.5
+
 // signatures draws the boxes that people fill in by hand, and the count of sheets.
 func (s *sheet) signatures(box Box, count string) {
-	const signatureHeight = 7.5
 	top := box.Bottom - signatureHeight
 	s.Line(Point{box.Left, top}, Point{box.Right, top}, thin)
 	names := []string{"designed", "checked", "date", "seal"}
