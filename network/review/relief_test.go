@@ -7,6 +7,7 @@ import (
 	"path/filepath"
 	"reflect"
 	"slices"
+	"strings"
 	"testing"
 
 	"pgregory.net/rapid"
@@ -103,6 +104,33 @@ func TestLeavingOutAnyOneWorkBreaksALimitOrMakesASizeFall(t *testing.T) {
 					t.Errorf("limits %v, works %v: %s may be left as it is", limits, works, s.Network.Pipes[left.Pipe].ID)
 				}
 			}
+		}
+	}
+}
+
+// A survey of the same trunk, with semicolons, without a last line end, levels and materials blank.
+func TestTheReliefOfASurveyWithUnknownLevelsHoldsToo(t *testing.T) {
+	dir := t.TempDir()
+	copied(t, dir, millStreet)
+	file := filepath.Join(dir, "pipes.csv")
+	text, err := os.ReadFile(file)
+	if err != nil {
+		t.Fatal(err)
+	}
+	blanked := strings.NewReplacer("24,clay,,102.50,101.20", "24,,,102.50,", "30,clay,,100.70,99.60", "30,,,,", "30,clay,,99.55,", "30,,,,", "12,clay,,108.60,107.30", "12,,,108.60,")
+	survey := strings.ReplaceAll(strings.TrimSpace(blanked.Replace(string(text))), ",", ";")
+	if err := os.WriteFile(file, []byte(survey), 0o644); err != nil {
+		t.Fatal(err)
+	}
+	s := read(t, dir)
+	if !levelsAssumed(s.Network) {
+		t.Fatal("no level is assumed")
+	}
+	for _, works := range [][]Work{nil, {Replace}, {Double}} {
+		r := findRelief(t, s, ReliefOptions{Limits: []LimitKind{Capacity, Freeboard, Rim}, Works: works, Runs: 300})
+		after := written(t, s, r, func(Alteration) bool { return true })
+		if broken := brokenIn(t, after.Job, r.Options.Limits); !r.Complete() || len(r.Changes) == 0 || len(broken) > 0 {
+			t.Errorf("works %v: %d changes, broken: %v", works, len(r.Changes), broken)
 		}
 	}
 }
@@ -253,22 +281,27 @@ func TestPricesAreThoseOfAPublicEstimate(t *testing.T) {
 func priced(t testing.TB) *Subject {
 	t.Helper()
 	dir := t.TempDir()
-	for _, folder := range []string{millStreet, unitCosts} {
-		entries, err := os.ReadDir(folder)
+	copied(t, dir, millStreet)
+	copied(t, dir, unitCosts)
+	return read(t, dir)
+}
+
+// copied copies the files of a folder.
+func copied(t testing.TB, dir, folder string) {
+	t.Helper()
+	entries, err := os.ReadDir(folder)
+	if err != nil {
+		t.Fatal(err)
+	}
+	for _, e := range entries {
+		text, err := os.ReadFile(filepath.Join(folder, e.Name()))
+		if err == nil {
+			err = os.WriteFile(filepath.Join(dir, e.Name()), text, 0o644)
+		}
 		if err != nil {
 			t.Fatal(err)
 		}
-		for _, e := range entries {
-			text, err := os.ReadFile(filepath.Join(folder, e.Name()))
-			if err == nil {
-				err = os.WriteFile(filepath.Join(dir, e.Name()), text, 0o644)
-			}
-			if err != nil {
-				t.Fatal(err)
-			}
-		}
 	}
-	return read(t, dir)
 }
 
 func TestWhereRemovalIsDearPipesAreDoubled(t *testing.T) {

@@ -24,6 +24,7 @@ type reliever struct {
 	asItIs  verdict
 
 	runs  int
+	until int // the count of runs at which the steps end
 	found bool
 	least bool
 	best  plan

@@ -94,6 +94,8 @@ func (s *SystemRelief) Proof() string {
 	switch {
 	case s.Found && s.Least:
 		return "least: all that is cheaper was tried"
+	case s.Found && s.Bound.First >= s.Price.First*sameSum:
+		return "least; of equal ones the best found"
 	case s.Found:
 		return "irreducible; the best found"
 	case s.Least:
@@ -219,7 +221,9 @@ func (r *ReliefReport) Amendments() []job.Amendment {
 		all[i] = job.Amendment{Pipe: c.Pipe, Cells: map[string]job.Cell{}}
 		was, is := j.SizeText(p.Shape, p.Size)+" "+j.Settings.Units.Size, j.SizeText(p.Shape, c.Choice.Size)
 		if c.Choice.Work == Replace {
-			laidNew(all[i].Cells, p)
+			if all[i].Cells["wall"] = (job.Cell{}); !levelsAssumed(n) {
+				laidNew(all[i].Cells, p)
+			}
 			all[i].Cells["size"] = job.Cell{Text: is}
 			all[i].Cells["note"] = job.Cell{Text: "relief: replaces " + was, After: true}
 			continue
@@ -242,6 +246,17 @@ func (r *ReliefReport) Amendments() []job.Amendment {
 }
 
 func numberCell(v float64) job.Cell { return job.Cell{Number: network.Some(v)} }
+
+// levelsAssumed tells whether levels of existing pipes are taken from those of others. A pipe that is replaced then stays an
+// existing one in the table, since its levels may be what others rest on.
+func levelsAssumed(n *network.Network) bool {
+	for i := range n.Pipes {
+		if n.Pipes[i].AssumedUpper || n.Pipes[i].AssumedLower {
+			return true
+		}
+	}
+	return false
+}
 
 // laidNew sets the cells of a row that stands for a new pipe: its wall is that of the catalogue, and what was assumed
 // of the old pipe is written down, since it is known of a new one.

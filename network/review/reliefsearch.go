@@ -29,11 +29,8 @@ func (f *reliever) search() {
 // take what lowers the levels most for its price. The plan that it returns need not hold.
 func (f *reliever) stepByStep() (plan, verdict) {
 	p, v := make(plan, len(f.choices)), f.asItIs
-	const stepsOfAPipe = 4 // a pipe may grow several times: a bound, not a tuned number
-	for range stepsOfAPipe * len(p) {
-		if v.holds() || len(v.problems) > 0 {
-			break
-		}
+	f.until = f.runs + f.options.runsOf(len(p))
+	for f.runs < f.until && !v.holds() && len(v.problems) == 0 { // it ends: every step takes a run or more
 		next, ok := f.step(p, &v)
 		if !ok {
 			break
@@ -58,12 +55,12 @@ func (f *reliever) step(p plan, v *verdict) (plan, bool) {
 
 // cure takes the cheapest choice of a pipe by which it carries its flow.
 func (f *reliever) cure(p plan, i network.PipeIndex) (plan, bool) {
-	for c := int(p[i]) + 1; c < len(f.choices[i]); c++ {
+	for c := int(p[i]) + 1; c < len(f.choices[i]) && f.runs < f.until; c++ {
 		next := f.with(p, i, int16(c))
 		if next == nil {
 			continue
 		}
-		if v := f.judge(next); len(v.problems) == 0 && !v.newFall && !slices.Contains(v.broken, Place{Capacity, int32(i)}) {
+		if v := f.judgeOnly(next, Capacity); len(v.problems) == 0 && !v.newFall && !slices.Contains(v.broken, Place{Capacity, int32(i)}) {
 			return next, true
 		}
 	}
@@ -77,7 +74,7 @@ func (f *reliever) lower(p plan, v *verdict) (plan, bool) {
 	most := 0.0
 	paid := f.price(p).First
 	for _, i := range f.below(v.broken) {
-		for c := int(p[i]) + 1; c < len(f.choices[i]); c++ {
+		for c := int(p[i]) + 1; c < len(f.choices[i]) && f.runs < f.until; c++ {
 			next := f.with(p, i, int16(c))
 			if next == nil {
 				continue
@@ -134,6 +131,7 @@ func (f *reliever) with(p plan, i network.PipeIndex, c int16) plan {
 			continue
 		}
 		for next[q]++; int(next[q]) < len(f.choices[q]); next[q]++ {
+			f.runs++ // no run, but counted, so that the steps end
 			n, twin = f.built(next)
 			if falls = f.fallsIn(n, twin); !falls[q] {
 				break
@@ -177,9 +175,11 @@ func (f *reliever) areas(i network.PipeIndex, c int) (all, largest float64) {
 }
 
 // irreducible makes a plan that holds cheaper, pipe by pipe from the dearest, until no single pipe can be left as it is or
-// take a cheaper choice.
+// take a cheaper choice. In a large system, after as many runs as the search may take, it is only asked whether a pipe can
+// be left as it is.
 func (f *reliever) irreducible(p plan) plan {
 	p = slices.Clone(p)
+	last := f.runs + f.options.runsOf(len(p))
 	for changed := true; changed; {
 		changed = false
 		for _, i := range f.dearest(p) {
@@ -187,6 +187,10 @@ func (f *reliever) irreducible(p plan) plan {
 			for p[i] = 0; p[i] < own; p[i]++ {
 				if v := f.judge(p); v.holds() {
 					changed = true
+					break
+				}
+				if f.runs >= last {
+					p[i] = own
 					break
 				}
 			}
