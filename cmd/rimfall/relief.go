@@ -60,7 +60,7 @@ With --out the job is written as a new folder with the pipes marked in the colum
 	f := cmd.Flags()
 	f.StringSliceVar(&r.limits, "limit", nil, "what must hold: "+strings.Join(review.Limits, ", ")+" (several with commas; all of them unless it is given)")
 	f.StringSliceVar(&r.works, "work", nil, "what may be done: "+strings.Join(review.Works[1:], ", ")+" (both unless it is given)")
-	f.IntVar(&r.runs, "runs", 0, fmt.Sprintf("the most runs of one system in the search for the least (0: %d, fewer in a system of over 40 pipes)", review.ReliefRuns))
+	f.IntVar(&r.runs, "runs", 0, fmt.Sprintf("the most runs of one system in the search for the least (0: %d, fewer in a system of over 60 pipes)", review.ReliefRuns))
 	f.Float64Var(&r.storm, "storm", 0, "design storm in `years`, in place of the job's")
 	f.StringVar(&r.out, "out", "", "write a complete new job folder `DIR`")
 	f.BoolVar(&r.force, "force", false, "replace the folder of --out where it exists")

@@ -12,7 +12,7 @@ import (
 type ReliefOptions struct {
 	Limits  []LimitKind // none: all of them
 	Works   []Work      // none: Replace and Double
-	Runs    int         // of one system in the search for the least; 0: ReliefRuns, fewer in a system of over 40 pipes
+	Runs    int         // of one system in the search for the least; 0: ReliefRuns, fewer in a system of over 60 pipes
 	Threads int         // 0: as many as the program may use
 }
 
@@ -125,7 +125,7 @@ func (o ReliefOptions) filled() ReliefOptions {
 
 // runsOf is how many runs the search for the least takes at most in a system of so many pipes.
 func (o *ReliefOptions) runsOf(pipes int) int {
-	const pipeRuns = 40 * ReliefRuns // of all pipes: some ten seconds
+	const pipeRuns = 60 * ReliefRuns // of all pipes: some ten seconds
 	if o.Runs > 0 {
 		return o.Runs
 	}

@@ -24,7 +24,8 @@ type reliever struct {
 	asItIs  verdict
 
 	runs  int
-	until int // the count of runs at which the steps end
+	spent int // networks that were made and not run
+	until int // the count of both at which the steps end
 	found bool
 	least bool
 	best  plan

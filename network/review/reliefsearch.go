@@ -29,8 +29,8 @@ func (f *reliever) search() {
 // take what lowers the levels most for its price. The plan that it returns need not hold.
 func (f *reliever) stepByStep() (plan, verdict) {
 	p, v := make(plan, len(f.choices)), f.asItIs
-	f.until = f.runs + f.options.runsOf(len(p))
-	for f.runs < f.until && !v.holds() && len(v.problems) == 0 { // it ends: every step takes a run or more
+	f.until = f.runs + f.spent + f.options.runsOf(len(p))
+	for f.runs+f.spent < f.until && !v.holds() && len(v.problems) == 0 { // it ends: every step takes a run or more
 		next, ok := f.step(p, &v)
 		if !ok {
 			break
@@ -55,7 +55,7 @@ func (f *reliever) step(p plan, v *verdict) (plan, bool) {
 
 // cure takes the cheapest choice of a pipe by which it carries its flow.
 func (f *reliever) cure(p plan, i network.PipeIndex) (plan, bool) {
-	for c := int(p[i]) + 1; c < len(f.choices[i]) && f.runs < f.until; c++ {
+	for c := int(p[i]) + 1; c < len(f.choices[i]) && f.runs+f.spent < f.until; c++ {
 		next := f.with(p, i, int16(c))
 		if next == nil {
 			continue
@@ -74,7 +74,7 @@ func (f *reliever) lower(p plan, v *verdict) (plan, bool) {
 	most := 0.0
 	paid := f.price(p).First
 	for _, i := range f.below(v.broken) {
-		for c := int(p[i]) + 1; c < len(f.choices[i]) && f.runs < f.until; c++ {
+		for c := int(p[i]) + 1; c < len(f.choices[i]) && f.runs+f.spent < f.until; c++ {
 			next := f.with(p, i, int16(c))
 			if next == nil {
 				continue
@@ -131,7 +131,7 @@ func (f *reliever) with(p plan, i network.PipeIndex, c int16) plan {
 			continue
 		}
 		for next[q]++; int(next[q]) < len(f.choices[q]); next[q]++ {
-			f.runs++ // no run, but counted, so that the steps end
+			f.spent++ // no run, but counted, so that the steps end
 			n, twin = f.built(next)
 			if falls = f.fallsIn(n, twin); !falls[q] {
 				break
